@@ -1,0 +1,114 @@
+package plot
+
+import (
+	"math"
+
+	"gonum.org/v1/plot/vg"
+)
+
+// Pt is a place in metres: along a figure's horizontal axis, and a level.
+type Pt struct{ X, Y float64 }
+
+// frame maps metres to points of a sheet.
+type frame struct {
+	x0, x1, y0, y1     float64 // metres
+	left, bottom, w, h float64 // points
+}
+
+func (f frame) at(x, y float64) vg.Point { return pt(f.px(x), f.py(y)) }
+
+func (f frame) px(x float64) float64 { return f.left + (x-f.x0)/(f.x1-f.x0)*f.w }
+func (f frame) py(y float64) float64 { return f.bottom + (y-f.y0)/(f.y1-f.y0)*f.h }
+
+func (f frame) path(pts []Pt) []vg.Point {
+	out := make([]vg.Point, len(pts))
+	for i, p := range pts {
+		out[i] = f.at(p.X, p.Y)
+	}
+	return out
+}
+
+// exaggeration is how many times heights are drawn larger than lengths.
+func (f frame) exaggeration() float64 {
+	return f.h / (f.y1 - f.y0) / (f.w / (f.x1 - f.x0))
+}
+
+// bounds returns the least and greatest level of lines.
+func bounds(lines ...[]Pt) (lo, hi float64) {
+	lo, hi = math.Inf(1), math.Inf(-1)
+	for _, l := range lines {
+		for _, p := range l {
+			lo, hi = math.Min(lo, p.Y), math.Max(hi, p.Y)
+		}
+	}
+	return lo, hi
+}
+
+// step returns a round step that cuts a length into at most n parts.
+func step(length float64, n int) float64 {
+	if length <= 0 {
+		return 1
+	}
+	raw := length / float64(n)
+	unit := math.Pow(10, math.Floor(math.Log10(raw)))
+	for _, m := range []float64{1, 2, 5, 10} {
+		if m*unit >= raw*(1-1e-9) {
+			return m * unit
+		}
+	}
+	return 10 * unit
+}
+
+// grid draws the box, level lines with their figures, and station lines with
+// their labels.
+func (s *sheet) grid(f frame, label func(float64) string, levels func(float64) string) {
+	dy := step(f.y1-f.y0, 8)
+	for y := math.Ceil(f.y0/dy) * dy; y <= f.y1+1e-9; y += dy {
+		s.line(hairPen, f.at(f.x0, y), f.at(f.x1, y))
+		s.text(8, right, f.left-4, f.py(y)-3, levels(y))
+	}
+	dx := step(f.x1-f.x0, 12)
+	for x := math.Ceil(f.x0/dx) * dx; x <= f.x1+1e-9; x += dx {
+		s.line(hairPen, f.at(x, f.y0), f.at(x, f.y1))
+		s.text(8, middle, f.px(x), f.bottom-11, label(x))
+	}
+	s.line(thinPen, f.at(f.x0, f.y0), f.at(f.x1, f.y0), f.at(f.x1, f.y1), f.at(f.x0, f.y1), f.at(f.x0, f.y0))
+}
+
+// on returns the level of a line at x by straight pieces; ok is false outside.
+func on(line []Pt, x float64) (y float64, ok bool) {
+	for i := 1; i < len(line); i++ {
+		a, b := line[i-1], line[i]
+		if a.X <= x && x <= b.X {
+			if b.X == a.X {
+				return b.Y, true
+			}
+			return a.Y + (b.Y-a.Y)*(x-a.X)/(b.X-a.X), true
+		}
+	}
+	return 0, false
+}
+
+// earth marks the ground between two lines: dots where the ground stands above
+// the design (cut), level lines where it lies below (fill).
+func (s *sheet) earth(f frame, ground, design []Pt, from, to float64) {
+	const dx, dy = 5.0, 5.0 // points between marks
+	cols := int((f.px(to) - f.px(from)) / dx)
+	for i := 0; i <= cols; i++ {
+		px := f.px(from) + (float64(i)+0.5)*dx
+		x := f.x0 + (px-f.left)/f.w*(f.x1-f.x0)
+		g, okG := on(ground, x)
+		d, okD := on(design, x)
+		if !okG || !okD || x > to {
+			continue
+		}
+		lo, hi := f.py(math.Min(g, d)), f.py(math.Max(g, d))
+		for py := math.Ceil(lo/dy) * dy; py < hi; py += dy {
+			if g > d {
+				s.dot(rose, pt(px, py), 0.7)
+				continue
+			}
+			s.line(pen{0.5, nil, amber}, pt(px-dx/2, py), pt(px+dx/2, py))
+		}
+	}
+}

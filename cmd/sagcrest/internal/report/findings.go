@@ -1,0 +1,61 @@
+package report
+
+import (
+	"fmt"
+	"strings"
+
+	"sagcrest/cmd/sagcrest/internal/table"
+	"sagcrest/cmd/sagcrest/internal/wire"
+	"sagcrest/profile/finding"
+)
+
+func (s *sheets) findingsTable() *table.Table {
+	t := &table.Table{Name: "findings", Title: "Findings", Tick: true, Columns: []table.Column{
+		words("code", "code"), words("severity", "grade"), words("place", "place"), words("message", "what is wrong"),
+		words("measured", "measured"), words("limit", "limit"), words("input", "in the project file"), words("help", "how to mend it"), words("accepted", "accepted by")},
+		Note: "E is an error and marks the sheets, W a warning, N a note. `sagcrest explain CODE` prints the formula and source of a check."}
+	for i, f := range s.r.Findings {
+		accepted := ""
+		if f.Accepted != nil {
+			accepted = f.Accepted.By + ", " + f.Accepted.Date + ": " + f.Accepted.Reason
+		}
+		code := table.Words(f.Code)
+		code.Strong = f.Severity == "E" && f.Accepted == nil
+		t.Add(code, table.Words(f.Severity), table.Words(s.findingPlace(s.o.Findings[i])), table.Words(f.Message),
+			table.Words(s.paper.Measure(s.o.Findings[i].Measured)), table.Words(s.paper.Measure(s.o.Findings[i].Limit)),
+			table.Words(inputPlace(f.Where)), table.Words(f.Help), table.Words(accepted))
+	}
+	return t
+}
+
+// findingPlace writes name, stretch and offset of a finding.
+func (s *sheets) findingPlace(f finding.Finding) string {
+	var parts []string
+	if f.At.ID != "" {
+		parts = append(parts, f.At.ID)
+	}
+	if at := f.At.At; f.At.On {
+		text := s.o.Project.Labels.Format(at.From)
+		if at.To != at.From {
+			text += " to " + s.o.Project.Labels.Format(at.To)
+		}
+		parts = append(parts, text)
+	}
+	if f.At.Beside {
+		parts = append(parts, "offset "+s.paper.Offset(f.At.Off)+" "+s.paper.LengthUnit())
+	}
+	return strings.Join(parts, ", ")
+}
+
+// inputPlace writes where in the project file a finding points.
+func inputPlace(w wire.Where) string {
+	if w.Line == 0 {
+		return w.Key
+	}
+	return fmt.Sprintf("%s, line %d", w.Key, w.Line)
+}
+
+// openWords counts the findings that nobody accepted.
+func (s *sheets) openWords() string {
+	return fmt.Sprintf("%d open errors, %d open warnings", s.o.Errors(), s.o.Warnings())
+}
