@@ -121,7 +121,9 @@ func (q *Quantities) measured(item section.ItemID) (m finding.Measure, ok bool) 
 		m = finding.Of(float64(q.Fill), "m3")
 	case section.Strip:
 		m = finding.Of(q.Strip, "m3")
-	case "land": // as package bill names it
+	case "respread": // this and land as package bill names them
+		m = finding.Of(q.Respread, "m3")
+	case "land":
 		m = finding.Of(q.Land[0]+q.Land[1], "m2")
 	default:
 		return m, false

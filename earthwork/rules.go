@@ -37,7 +37,7 @@ func Rules() []finding.Rule {
 			Code: "Q24", Default: finding.Warning,
 			Title:   "Hand quantity for an item that is measured too",
 			Message: "%v of %v were entered by hand; the program measures %v of it",
-			Formula: "item of the hand quantity is none of excavation, embankment, strip, land",
+			Formula: "item of the hand quantity is none of excavation, embankment, strip, respread, land",
 			Source:  practice,
 			Effect:  "The same work may be paid twice.",
 			Mend:    "Keep it only if it lies outside the sections, and say so in its note.",

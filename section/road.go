@@ -179,10 +179,16 @@ func (r *Road) TypicalAt(s station.Station, before bool) int {
 }
 
 // holds reports whether a stretch of the road holds s, which is clamped to the
-// road. With before, and at the road's end, the end of the stretch belongs to
-// it and its start does not.
+// road; within a centimetre of an end of the stretch s is at it. With before,
+// and at the road's end, the end of the stretch belongs to it and its start does
+// not.
 func (r *Road) holds(over station.Interval, s station.Station, before bool) bool {
 	s = min(max(s, r.over.From), r.over.To)
+	for _, end := range []station.Station{over.From, over.To} {
+		if math.Abs(float64(s-end)) < station.Same {
+			s = end
+		}
+	}
 	if before && s > r.over.From || s >= r.over.To {
 		return over.From < s && s <= over.To
 	}

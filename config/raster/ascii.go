@@ -110,8 +110,9 @@ func (f *file) readASCII() (*Raster, error) {
 	if err != nil {
 		return nil, err
 	}
-	body := words{data: f.data, pos: first.lineStart + first.column - 1, line: first.line - 1, lineStart: first.lineStart}
-	f.where = func(cell int) place { return f.nth(body, cell) }
+	start := words{data: f.data, pos: first.lineStart + first.column - 1, line: first.line - 1, lineStart: first.lineStart}
+	f.where = func(cell int) place { return f.nth(start, cell) }
+	body := start
 	if err := f.levels(&body, r); err != nil {
 		return nil, err
 	}

@@ -10,7 +10,13 @@ type Cross struct {
 	Title, Below string
 	// Ground, Stripped, Finished and Earthwork run from left to right.
 	Ground, Stripped, Finished, Earthwork []Pt
-	Catches                               []Mark
+	Catches                               []Catch
+}
+
+// Catch is a catch point; Below sets its figures under the ground.
+type Catch struct {
+	Mark
+	Below bool
 }
 
 // CrossSheet lays sections out in rows, all at one scale.
@@ -30,18 +36,19 @@ func (c CrossSheet) Draw() (string, error) {
 		for _, p := range x.Finished {
 			half = math.Max(half, math.Abs(p.X)+2)
 		}
-		lo, hi := bounds(x.Finished, x.Earthwork)
-		glo, ghi := bounds(clip(x.Ground, -half, half))
-		tall = math.Max(tall, math.Max(hi, ghi)-math.Min(lo, glo))
+	}
+	for _, x := range c.Sections {
+		lo, hi := bounds(x.Finished, x.Earthwork, clip(x.Ground, -half, half))
+		tall = math.Max(tall, hi-lo)
 	}
 	scale := (cellW - 2*margin) / (2 * half) // points per metre
-	cellH := tall*scale + 2*margin + head + 14
+	cellH := tall*scale + 2*margin + head + 24
 	rows := (len(c.Sections) + c.Across - 1) / c.Across
 	s := newSheet(cellW*float64(c.Across), cellH*float64(rows)+16)
 	for i, x := range c.Sections {
 		col, row := i%c.Across, i/c.Across
 		lo, _ := bounds(x.Finished, x.Earthwork, clip(x.Ground, -half, half))
-		f := frame{-half, half, lo, lo + tall, float64(col)*cellW + margin, s.h - 16 - float64(row+1)*cellH + margin + 14, cellW - 2*margin, tall * scale}
+		f := frame{-half, half, lo, lo + tall, float64(col)*cellW + margin, s.h - 16 - float64(row+1)*cellH + margin + 24, cellW - 2*margin, tall * scale}
 		x.draw(s, f)
 	}
 	s.text(8, left, margin, s.h-10, fmt.Sprintf("looking up-station; one scale for lengths and heights, %.0f %s between the marks of the axis; ground dashed, stripped ground dotted, finished surface heavy, earthwork line dash-dotted; cut dotted, fill with level lines", 5.0, c.Unit))
@@ -65,9 +72,11 @@ func clip(line []Pt, a, b float64) (out []Pt) {
 }
 
 func (x Cross) draw(s *sheet, f frame) {
-	s.line(hairPen, pt(f.left, f.bottom), pt(f.left+f.w, f.bottom))
+	const axis = 10 // points below the lowest ground, clear of the figures there
+	f0 := f.bottom - axis
+	s.line(hairPen, pt(f.left, f0), pt(f.left+f.w, f0))
 	for o := math.Ceil(f.x0/5) * 5; o <= f.x1; o += 5 {
-		s.line(hairPen, pt(f.px(o), f.bottom), pt(f.px(o), f.bottom-3))
+		s.line(hairPen, pt(f.px(o), f0), pt(f.px(o), f0-3))
 	}
 	s.line(pen{0.35, nil, grey}, pt(f.px(0), f.bottom), pt(f.px(0), f.bottom+f.h))
 	if n := len(x.Earthwork); n > 0 {
@@ -80,12 +89,17 @@ func (x Cross) draw(s *sheet, f frame) {
 	for _, c := range x.Catches {
 		q := f.at(c.X, c.Y)
 		s.dot(black, q, 1.8)
-		a := right
+		// Above the ground beside a cut, below it beside a fill: both stay clear
+		// of the slope.
+		a, dy := right, 5.0
 		if c.X < 0 {
 			a = left
 		}
-		s.text(6.5, a, float64(q.X), float64(q.Y)+5, c.Name)
+		if c.Below {
+			dy = -10
+		}
+		s.text(6.5, a, float64(q.X), float64(q.Y)+dy, c.Name)
 	}
 	s.text(9, left, f.left, f.bottom+f.h+8, x.Title)
-	s.text(7, left, f.left, f.bottom-11, x.Below)
+	s.text(7, left, f.left, f0-11, x.Below)
 }

@@ -105,10 +105,10 @@ func (s *sheet) earth(f frame, ground, design []Pt, from, to float64) {
 		lo, hi := f.py(math.Min(g, d)), f.py(math.Max(g, d))
 		for py := math.Ceil(lo/dy) * dy; py < hi; py += dy {
 			if g > d {
-				s.dot(rose, pt(px, py), 0.7)
+				s.dot(earthInk, pt(px, py), 0.8)
 				continue
 			}
-			s.line(pen{0.5, nil, amber}, pt(px-dx/2, py), pt(px+dx/2, py))
+			s.line(pen{0.6, nil, amber}, pt(px-dx/2, py), pt(px+dx/2, py))
 		}
 	}
 }

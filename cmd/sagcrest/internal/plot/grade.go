@@ -66,14 +66,14 @@ func (g Grade) frame(h float64) frame {
 	return frame{x0, x1, lo - pad, hi + 2*pad, 50, h - 300, 1035, 270}
 }
 
-// names labels the two lines where they lie farthest apart.
+// names labels the two lines where they lie far apart and no mark stands near.
 func (g Grade) names(s *sheet, f frame) {
 	best, at := 0.0, g.Line[0].X
-	for i := 1; i < 20; i++ {
-		x := f.x0 + (f.x1-f.x0)*float64(i)/20
+	for i := 1; i < 40; i++ {
+		x := f.x0 + (f.x1-f.x0)*float64(i)/40
 		y, okG := on(g.Ground, x)
 		z, okD := on(g.Line, x)
-		if okG && okD && math.Abs(y-z) > best {
+		if okG && okD && math.Abs(y-z) > best && g.clearAt(f, x) {
 			best, at = math.Abs(y-z), x
 		}
 	}
@@ -85,6 +85,19 @@ func (g Grade) names(s *sheet, f frame) {
 	}
 	s.text(9, middle, f.px(at), f.py(z)+up, "grade line")
 	s.text(9, middle, f.px(at), f.py(y)+down, "ground")
+}
+
+// clearAt reports whether no mark stands within the width of a word.
+func (g Grade) clearAt(f frame, x float64) bool {
+	const word = 60.0 // points
+	for _, ms := range [][]Mark{g.PVIs, g.Turns, g.Culverts} {
+		for _, m := range ms {
+			if math.Abs(f.px(m.X)-f.px(x)) < word {
+				return false
+			}
+		}
+	}
+	return true
 }
 
 func (g Grade) marks(s *sheet, f frame) {

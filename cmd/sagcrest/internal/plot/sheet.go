@@ -28,6 +28,9 @@ var (
 	green = color.RGBA{R: 0x00, G: 0x9E, B: 0x73, A: 255}
 	rose  = color.RGBA{R: 0xCC, G: 0x79, B: 0xA7, A: 255}
 	amber = color.RGBA{R: 0xE6, G: 0x9F, B: 0x00, A: 255}
+	// earthInk is the rose of cut, darkened so that small dots print in black
+	// and white.
+	earthInk = color.RGBA{R: 0x8C, G: 0x3E, B: 0x6A, A: 255}
 
 	groundPen   = pen{1, []vg.Length{5, 3}, black}
 	strippedPen = pen{0.6, []vg.Length{1.5, 2}, black}

@@ -204,8 +204,8 @@ func (s *sheets) costTable() *table.Table {
 		if l.Rate == nil {
 			rate = table.None("no rate")
 		}
-		t.Add(table.Words(l.Item), s.volume(l.Quantity, "earthwork.totals.cut_bank", s.paper.Count), table.Words(l.Unit), rate,
-			s.volume(l.Amount, "cost.total", s.paper.Money))
+		t.Add(table.Words(l.Item), s.volume(l.Quantity, path(row, i, "quantity"), s.paper.Count), table.Words(l.Unit), rate,
+			s.volume(l.Amount, path(row, i, "amount"), s.paper.Money))
 	}
 	total := s.volume(c.Total, "cost.total", s.paper.Money)
 	total.Strong = true

@@ -194,7 +194,8 @@ func (s *sheets) cross(c *section.Slice) plot.Cross {
 	}
 	for _, f := range []section.Flank{c.Left, c.Right} {
 		if c.OK {
-			x.Catches = append(x.Catches, plot.Mark{X: f.Catch.O, Y: f.Catch.Z, Name: s.paper.Length(f.Catch.O) + " / " + s.paper.Elevation(f.Catch.Z)})
+			name := s.paper.Length(f.Catch.O) + " / " + s.paper.Elevation(f.Catch.Z)
+			x.Catches = append(x.Catches, plot.Catch{Mark: plot.Mark{X: f.Catch.O, Y: f.Catch.Z, Name: name}, Below: !f.Cut})
 		}
 	}
 	return x

@@ -2,6 +2,8 @@ package study
 
 import (
 	"context"
+	"fmt"
+	"slices"
 	"strings"
 
 	"sagcrest/config/diag"
@@ -67,7 +69,7 @@ func (o *Outcome) settle(found []finding.Finding) {
 				found[i].Stops = append(found[i].Stops, withheld...)
 			}
 		}
-		found[i].Stops = o.present(found[i].Stops)
+		found[i].Stops = o.withCost(found[i].Stops)
 	}
 	finding.Sort(found)
 	o.Findings = found
@@ -86,14 +88,33 @@ func (o *Outcome) stopsVolumes(f finding.Finding) bool {
 	return false
 }
 
-// present drops the paths that this run has no results for.
-func (o *Outcome) present(stops []string) []string {
+// withCost drops the paths that this run has no results for, and adds the lines
+// of the bill that hang on what is withheld.
+func (o *Outcome) withCost(stops []string) []string {
 	out := stops[:0:0]
 	for _, s := range stops {
-		if strings.HasPrefix(s, "cost") && o.Bill == nil {
-			continue
+		if !strings.HasPrefix(s, "cost") || o.Bill != nil {
+			out = append(out, s)
 		}
-		out = append(out, s)
 	}
-	return out
+	if o.Bill == nil {
+		return out
+	}
+	hangs := func(item string) bool {
+		for i, l := range o.Culverts {
+			if item == "culvert "+l.Culvert.ID {
+				return slices.Contains(stops, fmt.Sprintf("drainage.culverts[%d].length", i))
+			}
+		}
+		if item == "borrow" || item == "waste" {
+			return slices.Contains(stops, "earthwork.mass.ordinates")
+		}
+		return slices.Contains(stops, "earthwork.totals.cut_bank")
+	}
+	for i, l := range o.Bill.Lines {
+		if !l.Quantity.Known && hangs(l.Item) {
+			out = append(out, fmt.Sprintf("cost.lines[%d].quantity", i), fmt.Sprintf("cost.lines[%d].amount", i), "cost.total")
+		}
+	}
+	return slices.Compact(out)
 }

@@ -2,6 +2,7 @@ package wire
 
 import (
 	"math"
+	"path/filepath"
 
 	"sagcrest/cmd/sagcrest/internal/study"
 	"sagcrest/config"
@@ -103,7 +104,7 @@ func (b builder) findings() []Finding {
 	for i, f := range b.Findings {
 		p := b.Problem(f)
 		rule, _ := study.Rule(f.Code)
-		w := Where{Key: f.At.Key, File: p.File, Line: p.Line, Column: p.Column, ID: f.At.ID}
+		w := Where{Key: f.At.Key, File: b.file(p.File), Line: p.Line, Column: p.Column, ID: f.At.ID}
 		if f.At.On {
 			w.From, w.To = fine(float64(f.At.At.From)), fine(float64(f.At.At.To))
 		}
@@ -130,4 +131,13 @@ func (b builder) alignment() Alignment {
 			RadiusFrom: radius(e.RadiusFrom), RadiusTo: radius(e.RadiusTo)})
 	}
 	return a
+}
+
+// file returns a path as the documents name it: relative to the project, so
+// that they do not depend on where it was called from.
+func (b builder) file(path string) string {
+	if rel, err := filepath.Rel(filepath.Dir(b.Project.File()), path); err == nil && path != "" {
+		return filepath.ToSlash(rel)
+	}
+	return path
 }
