@@ -52,6 +52,7 @@ const beside = 4.0
 
 func (d *Drawing) ground(b barrelLine, w *section.Scratch, left, right float64, bends []float64) {
 	xs := append(walk(w, b.axis, left-beside, right+beside), bends...)
+	xs = append(xs, left, right)
 	for _, x := range slices.Sorted(slices.Values(xs)) {
 		s, o := b.at(x)
 		if z, ok := b.road.Ground().Level(w, s, o); ok {

@@ -8,9 +8,12 @@ import (
 	"sagcrest/profile/station"
 )
 
-// footEnd is the length in metres at which the search for a foot ends: below
-// the rounding of map coordinates.
-const footEnd = 1e-11
+// footEnd is the length in metres at which the search for a foot ends: far below
+// anything measured, but not below the last bits of map coordinates.
+func footEnd(p orb.Point) float64 {
+	const bits = 4e-16 // two units in the last place
+	return 1e-11 + bits*math.Max(math.Abs(p[0]), math.Abs(p[1]))
+}
 
 // LocateNear returns the foot of a point near a station: where the alignment,
 // gone on straight beyond its ends, lies square to it. It is Newton's method on
@@ -18,6 +21,7 @@ const footEnd = 1e-11
 // centre it converges quadratically. ok is false when it does not.
 func (a *Alignment) LocateNear(p orb.Point, hint station.Station) (s station.Station, o station.Offset, ok bool) {
 	s = hint
+	end := footEnd(p)
 	for range 60 {
 		pose := a.At(s)
 		along, right := pose.project(p)
@@ -29,7 +33,7 @@ func (a *Alignment) LocateNear(p orb.Point, hint station.Station) (s station.Sta
 		}
 		step := along / room
 		s += station.Station(step)
-		if math.Abs(step) <= footEnd*(1+math.Abs(float64(s))*1e-3) {
+		if math.Abs(step) <= end {
 			_, right = a.At(s).project(p)
 			return s, station.Offset(right), true
 		}
@@ -128,7 +132,7 @@ func (e *Element) refine(f func(float64) float64, p orb.Point, a, b, fa float64)
 		if !(next > a && next < b) {
 			next = (a + b) / 2
 		}
-		if math.Abs(next-l) <= footEnd {
+		if math.Abs(next-l) <= footEnd(p) {
 			return next
 		}
 		l = next

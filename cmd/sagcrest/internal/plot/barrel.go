@@ -3,6 +3,8 @@ package plot
 import (
 	"fmt"
 	"math"
+
+	"gonum.org/v1/plot/vg"
 )
 
 // Barrel is a culvert drawn along its axis, from left to right of the road.
@@ -49,14 +51,17 @@ func (b Barrel) Draw() (string, error) {
 
 // zone shades where cover is judged: upright lines between datum and crown.
 func (b Barrel) zone(s *sheet, f frame) {
+	var lines vg.Path
 	for px := f.px(b.Hinges[0]); px <= f.px(b.Hinges[1]); px += 6 {
 		x := f.x0 + (px-f.left)/f.w*(f.x1-f.x0)
 		top, ok := on(b.Datum, x)
 		crown, okC := on(b.Crown, x)
 		if ok && okC && top > crown {
-			s.line(hairPen, f.at(x, crown), f.at(x, top))
+			lines.Move(f.at(x, crown))
+			lines.Line(f.at(x, top))
 		}
 	}
+	s.strokes(hairPen, lines)
 }
 
 func (b Barrel) words(s *sheet, f frame) {
@@ -72,6 +77,7 @@ func (b Barrel) words(s *sheet, f frame) {
 	}
 	s.text(9, a, float64(q.X)+dx, (float64(q.Y)+float64(top.Y))/2-3, b.CoverWords)
 	n := len(b.Invert) - 1
+	s.text(8, middle, f.px(0), (f.py(b.Invert[0].Y)+f.py(b.Invert[n].Y))/2+5, "barrel, with wall above")
 	s.text(8, left, f.px(b.Invert[0].X)+3, f.py(b.Invert[0].Y)-11, b.LeftWords)
 	s.text(8, right, f.px(b.Invert[n].X)-3, f.py(b.Invert[n].Y)-11, b.RightWords)
 	mid := (f.x0 + f.x1) / 2

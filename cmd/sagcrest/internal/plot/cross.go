@@ -3,6 +3,8 @@ package plot
 import (
 	"fmt"
 	"math"
+
+	"gonum.org/v1/plot/vg"
 )
 
 // Cross is one cross section, looking up-station.
@@ -75,9 +77,12 @@ func (x Cross) draw(s *sheet, f frame) {
 	const axis = 10 // points below the lowest ground, clear of the figures there
 	f0 := f.bottom - axis
 	s.line(hairPen, pt(f.left, f0), pt(f.left+f.w, f0))
+	var ticks vg.Path
 	for o := math.Ceil(f.x0/5) * 5; o <= f.x1; o += 5 {
-		s.line(hairPen, pt(f.px(o), f0), pt(f.px(o), f0-3))
+		ticks.Move(pt(f.px(o), f0))
+		ticks.Line(pt(f.px(o), f0-3))
 	}
+	s.strokes(hairPen, ticks)
 	s.line(pen{0.35, nil, grey}, pt(f.px(0), f.bottom), pt(f.px(0), f.bottom+f.h))
 	if n := len(x.Earthwork); n > 0 {
 		s.earth(f, x.Stripped, x.Earthwork, x.Earthwork[0].X, x.Earthwork[n-1].X)

@@ -89,26 +89,64 @@ func on(line []Pt, x float64) (y float64, ok bool) {
 	return 0, false
 }
 
+// column is the gap between two lines over one step of a drawing, in points.
+type column struct {
+	lo, hi float64
+	cut    bool
+}
+
 // earth marks the ground between two lines: dots where the ground stands above
-// the design (cut), level lines where it lies below (fill).
+// the design (cut), level lines where it lies below (fill). All dots are one
+// path and all level lines another, so that a report of many sections stays
+// small.
 func (s *sheet) earth(f frame, ground, design []Pt, from, to float64) {
 	const dx, dy = 5.0, 5.0 // points between marks
-	cols := int((f.px(to) - f.px(from)) / dx)
-	for i := 0; i <= cols; i++ {
-		px := f.px(from) + (float64(i)+0.5)*dx
-		x := f.x0 + (px-f.left)/f.w*(f.x1-f.x0)
+	cols := make([]column, int((f.px(to)-f.px(from))/dx)+1)
+	least, most := math.Inf(1), math.Inf(-1)
+	for i := range cols {
+		x := from + (float64(i)+0.5)*dx/f.w*(f.x1-f.x0)
 		g, okG := on(ground, x)
 		d, okD := on(design, x)
 		if !okG || !okD || x > to {
 			continue
 		}
-		lo, hi := f.py(math.Min(g, d)), f.py(math.Max(g, d))
-		for py := math.Ceil(lo/dy) * dy; py < hi; py += dy {
-			if g > d {
-				s.dot(earthInk, pt(px, py), 0.8)
-				continue
+		cols[i] = column{f.py(math.Min(g, d)), f.py(math.Max(g, d)), g > d}
+		least, most = math.Min(least, cols[i].lo), math.Max(most, cols[i].hi)
+	}
+	var dots, levels vg.Path
+	for py := math.Ceil(least/dy) * dy; py < most; py += dy {
+		start := -1.0
+		for i, c := range append(cols, column{}) {
+			px := f.px(from) + float64(i)*dx
+			inside := c.lo <= py && py < c.hi
+			if inside && c.cut {
+				dots.Move(pt(px+dx/2-dot, py))
+				dots.Line(pt(px+dx/2+dot, py))
 			}
-			s.line(pen{0.6, nil, amber}, pt(px-dx/2, py), pt(px+dx/2, py))
+			if inside && !c.cut && start < 0 {
+				start = px
+			}
+			if (!inside || c.cut) && start >= 0 {
+				levels.Move(pt(start, py))
+				levels.Line(pt(px, py))
+				start = -1
+			}
 		}
 	}
+	s.strokes(pen{2 * dot, nil, earthInk}, dots)
+	s.strokes(pen{0.6, nil, amber}, levels)
+}
+
+// dot is half the side of a square dot, in points.
+const dot = 0.75
+
+// strokes draws a path of many pieces.
+func (s *sheet) strokes(p pen, path vg.Path) {
+	if len(path) == 0 {
+		return
+	}
+	s.c.SetColor(p.ink)
+	s.c.SetLineWidth(p.width)
+	s.c.SetLineDash(p.dash, 0)
+	s.c.Stroke(path)
 }

@@ -3,12 +3,19 @@ package plot
 import (
 	"fmt"
 	"math"
+	"slices"
 )
 
 // Mark is a thing at a place of the long profile.
 type Mark struct {
 	X, Y float64
 	Name string
+}
+
+// Turn is a low or high point.
+type Turn struct {
+	Mark
+	Low bool
 }
 
 // Window is an obstacle over or under the road.
@@ -24,7 +31,7 @@ type Grade struct {
 	Level                func(y float64) string
 	Ground, Line         []Pt
 	PVIs, Ends           []Mark // points of intersection; ends of curves
-	Turns                []Mark // low and high points of the centre line
+	Turns                []Turn // low and high points of the centre line
 	Culverts             []Mark
 	Windows              []Window
 	Mass                 []Pt
@@ -90,14 +97,9 @@ func (g Grade) names(s *sheet, f frame) {
 // clearAt reports whether no mark stands within the width of a word.
 func (g Grade) clearAt(f frame, x float64) bool {
 	const word = 60.0 // points
-	for _, ms := range [][]Mark{g.PVIs, g.Turns, g.Culverts} {
-		for _, m := range ms {
-			if math.Abs(f.px(m.X)-f.px(x)) < word {
-				return false
-			}
-		}
-	}
-	return true
+	near := func(m Mark) bool { return math.Abs(f.px(m.X)-f.px(x)) < word }
+	return !slices.ContainsFunc(g.PVIs, near) && !slices.ContainsFunc(g.Culverts, near) &&
+		!slices.ContainsFunc(g.Turns, func(t Turn) bool { return near(t.Mark) })
 }
 
 func (g Grade) marks(s *sheet, f frame) {
@@ -108,13 +110,24 @@ func (g Grade) marks(s *sheet, f frame) {
 	for _, p := range g.PVIs {
 		q := f.at(p.X, p.Y)
 		s.triangle(float64(q.X), float64(q.Y))
-		s.text(8, middle, float64(q.X), float64(q.Y)+8, p.Name)
+		dy := 8.0
+		if z, ok := on(g.Line, p.X); ok && z > p.Y {
+			dy = -12 // of a sag: away from the grade line
+		}
+		s.text(8, middle, float64(q.X), float64(q.Y)+dy, p.Name)
 	}
 	for _, t := range g.Turns {
 		q := f.at(t.X, t.Y)
 		s.dot(black, q, 2.4)
-		s.line(hairPen, q, pt(float64(q.X), f.bottom+4))
-		s.upright(8, float64(q.X)-2, f.bottom+6, t.Name)
+		// Low points are named above the grade line, high points below it, where
+		// nothing else stands.
+		end, text := f.bottom+4, f.bottom+6
+		if t.Low {
+			end = f.bottom + f.h - 4
+			text = end - 2 - s.width(8, t.Name)
+		}
+		s.line(hairPen, q, pt(float64(q.X), end))
+		s.upright(8, float64(q.X)-2, text, t.Name)
 	}
 	for _, c := range g.Culverts {
 		q := f.at(c.X, c.Y)
@@ -151,6 +164,10 @@ func (g Grade) mass(s *sheet, f frame) {
 	for _, b := range g.Balance {
 		q := m.at(b.X, 0)
 		s.dot(black, q, 2.4)
-		s.upright(7, float64(q.X)+8, float64(q.Y)+4, b.Name)
+		y := float64(q.Y) + 4
+		if y+s.width(7, b.Name) > m.bottom+m.h {
+			y = float64(q.Y) - 4 - s.width(7, b.Name)
+		}
+		s.upright(7, math.Min(float64(q.X)+8, m.left+m.w-2), y, b.Name)
 	}
 }

@@ -38,11 +38,11 @@ func (p Plan) Draw() (string, error) {
 	lo, hi := bounds(all...)
 	const w = 1060.0
 	h := math.Max((hi-lo)/(x1-x0)*w, 60)
-	s := newSheet(w+40, h+90)
+	s := newSheet(w+40, h+150)
 	// One scale both ways, the road in the middle of the sheet.
 	tall := h / w * (x1 - x0)
 	mid := (lo + hi) / 2
-	f := frame{x0, x1, mid - tall/2, mid + tall/2, 20, 30, w, h}
+	f := frame{x0, x1, mid - tall/2, mid + tall/2, 20, 60, w, h}
 	pens := []pen{designPen, thinPen, thinPen}
 	for i, l := range all {
 		q := limitPen
@@ -54,7 +54,8 @@ func (p Plan) Draw() (string, error) {
 	for i, c := range p.Barrels {
 		u, v := rot(c[0]), rot(c[1])
 		s.line(pen{3, nil, green}, f.at(u.X, u.Y), f.at(v.X, v.Y))
-		s.text(9, left, f.px(u.X)+5, f.py(math.Max(u.Y, v.Y))+6, p.BarrelNames[i])
+		top := f.py(math.Max(u.Y, v.Y))
+		s.call(f.px((u.X+v.X)/2), top, f.px((u.X+v.X)/2), top+34, 9, p.BarrelNames[i])
 	}
 	p.marks(s, f, rot)
 	p.north(s, turn)
@@ -72,13 +73,25 @@ func (p Plan) marks(s *sheet, f frame, rot func(Pt) Pt) {
 	for _, m := range p.Stations {
 		q := rot(Pt{m.X, m.Y})
 		s.dot(black, f.at(q.X, q.Y), 2)
-		s.text(8, middle, f.px(q.X), f.py(q.Y)-14, m.Name)
+		s.call(f.px(q.X), f.py(q.Y), f.px(q.X), f.py(q.Y)-28, 8, m.Name)
 	}
 	for i, m := range p.Ends {
 		q := rot(Pt{m.X, m.Y})
 		s.line(thinPen, pt(f.px(q.X), f.py(q.Y)-8), pt(f.px(q.X), f.py(q.Y)+8))
-		s.text(8, middle, f.px(q.X), f.py(q.Y)+12+float64(i%2)*9, m.Name)
+		s.call(f.px(q.X), f.py(q.Y)+8, f.px(q.X), f.py(q.Y)+24+float64(i%2)*10, 8, m.Name)
 	}
+}
+
+// call writes a name away from its place, with a hair line to it, so that it
+// stays clear of the lines along the road.
+func (s *sheet) call(x, y, tx, ty, size float64, name string) {
+	s.line(hairPen, pt(x, y), pt(tx, ty))
+	if ty < y {
+		ty -= size
+	} else {
+		ty += 2
+	}
+	s.text(size, middle, tx, ty, name)
 }
 
 // north draws an arrow in the upper right corner, and says what the lines are.

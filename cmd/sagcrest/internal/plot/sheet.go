@@ -135,7 +135,8 @@ func pt(x, y float64) vg.Point { return vg.Point{X: vg.Length(x), Y: vg.Length(y
 
 var (
 	opening = regexp.MustCompile(`(?s)^.*?<svg[^>]*>`)
-	family  = regexp.MustCompile(`font-family:[^;"]*`)
+	// family is what every text repeats; the element says it once.
+	family = regexp.MustCompile(`font-family:[^"]*font-size:`)
 )
 
 // svg finishes the drawing: an element with a role, title and description, and
@@ -145,9 +146,9 @@ func (s *sheet) svg(id, title, desc string) (string, error) {
 	if _, err := s.c.WriteTo(&b); err != nil {
 		return "", err
 	}
-	head := fmt.Sprintf(`<svg viewBox="0 0 %.0f %.0f" role="img" aria-labelledby="%s-t %s-d"><title id="%s-t">%s</title><desc id="%s-d">%s</desc>`,
+	head := fmt.Sprintf(`<svg viewBox="0 0 %.0f %.0f" font-family="Liberation Sans, Arial, Helvetica, sans-serif" role="img" aria-labelledby="%s-t %s-d"><title id="%s-t">%s</title><desc id="%s-d">%s</desc>`,
 		s.w, s.h, id, id, id, html.EscapeString(title), id, html.EscapeString(desc))
 	text := opening.ReplaceAllLiteralString(b.String(), head)
-	text = family.ReplaceAllLiteralString(text, "font-family:Liberation Sans,Arial,Helvetica,sans-serif")
+	text = family.ReplaceAllLiteralString(text, "font-size:")
 	return strings.TrimSpace(text), nil
 }

@@ -40,7 +40,8 @@ func (s *sheets) gradeFigure() ([]figureOf, error) {
 		if t.Low {
 			name = "low "
 		}
-		g.Turns = append(g.Turns, plot.Mark{X: float64(t.At), Y: t.Elev, Name: name + s.label(float64(t.At)) + "  " + s.paper.Elevation(t.Elev)})
+		name += s.label(float64(t.At)) + "  " + s.paper.Elevation(t.Elev)
+		g.Turns = append(g.Turns, plot.Turn{Mark: plot.Mark{X: float64(t.At), Y: t.Elev, Name: name}, Low: t.Low})
 	}
 	for _, l := range s.o.Culverts {
 		if l.Ended {

@@ -57,5 +57,12 @@ func inputPlace(w wire.Where) string {
 
 // openWords counts the findings that nobody accepted.
 func (s *sheets) openWords() string {
-	return fmt.Sprintf("%d open errors, %d open warnings", s.o.Errors(), s.o.Warnings())
+	return plural(s.o.Errors(), "open error") + ", " + plural(s.o.Warnings(), "open warning")
+}
+
+func plural(n int, what string) string {
+	if n == 1 {
+		return "1 " + what
+	}
+	return fmt.Sprintf("%d %ss", n, what)
 }
