@@ -3,6 +3,7 @@ package main
 import (
 	"go/ast"
 	"go/token"
+	"path/filepath"
 	"regexp"
 	"slices"
 	"strconv"
@@ -36,6 +37,16 @@ func TestEveryCodeHasAPageAndEveryPageACode(t *testing.T) {
 		assert.Contains(t, raised, code, "has a page, but nothing raises it")
 	}
 	assert.True(t, slices.IsSorted(pages))
+}
+
+// Every page has a bad project that shows it, with its near miss: a code that
+// nobody can trigger cannot be trusted.
+func TestEveryCodeHasABadProjectAndANearMiss(t *testing.T) {
+	for _, r := range study.Catalogue() {
+		dir := filepath.Join(root, "testdata", "bad", string(r.Code))
+		assert.FileExists(t, filepath.Join(dir, "road.toml"))
+		assert.FileExists(t, filepath.Join(dir, "near", "road.toml"))
+	}
 }
 
 // raisedCodes collects the codes in the sources outside of functions called

@@ -84,7 +84,7 @@ func refusedWith(t *testing.T, err error, code int, text string) {
 
 func TestOurFolderIsReplacedWhole(t *testing.T) {
 	dir := lay(t, files(resultsName, oursJSON, "same.csv", "1", "old.csv", "2", "sub/older.csv", "3"))
-	p, err := planFolder(dir, files(resultsName, oursJSON+" ", "same.csv", "1", "new.csv", "4"), nil, false)
+	p, err := planFolder(dir, ofRun(), files(resultsName, oursJSON+" ", "same.csv", "1", "new.csv", "4"), nil, false)
 	require.NoError(t, err)
 	assert.Equal(t, []step{
 		{create, "new.csv"}, {remove, "old.csv"}, {overwrite, resultsName}, {unchanged, "same.csv"}, {remove, "sub/older.csv"},
@@ -106,10 +106,10 @@ func TestForeignFolderIsRefusedAndKeptByForce(t *testing.T) {
 		files(resultsName, "no json", "thesis.txt", "years of work"),
 	} {
 		dir := lay(t, foreign)
-		_, err := planFolder(dir, files(resultsName, oursJSON), nil, false)
+		_, err := planFolder(dir, ofRun(), files(resultsName, oursJSON), nil, false)
 		refusedWith(t, err, exitFiles, "not empty")
 
-		p, err := planFolder(dir, files(resultsName, oursJSON), nil, true)
+		p, err := planFolder(dir, ofRun(), files(resultsName, oursJSON), nil, true)
 		require.NoError(t, err)
 		aside, err := p.write(context.Background())
 		require.NoError(t, err)
@@ -123,19 +123,19 @@ func TestFolderThatHoldsAnInputIsNeverReplaced(t *testing.T) {
 	link := filepath.Join(t.TempDir(), "link")
 	require.NoError(t, os.Symlink(dir, link))
 	for _, out := range []string{dir, link, filepath.Join(dir, "x", ".."), filepath.Join(dir, "survey")} {
-		_, err := planFolder(out, files(resultsName, "x"), []string{filepath.Join(dir, "survey", "points.csv")}, true)
+		_, err := planFolder(out, ofRun(), files(resultsName, "x"), []string{filepath.Join(dir, "survey", "points.csv")}, true)
 		refusedWith(t, err, exitFiles, "holds an input")
 	}
-	_, err := planFolder(filepath.Join(dir, "out"), files(resultsName, "x"), []string{filepath.Join(dir, "road.toml")}, false)
+	_, err := planFolder(filepath.Join(dir, "out"), ofRun(), files(resultsName, "x"), []string{filepath.Join(dir, "road.toml")}, false)
 	assert.NoError(t, err, "a folder beside the inputs is fine")
 }
 
 func TestUnwritableFolderIsRefused(t *testing.T) {
 	// A folder cannot lie below a plain file, whoever runs the test.
 	dir := lay(t, files("plain", "x"))
-	_, err := planFolder(filepath.Join(dir, "plain"), nil, nil, true)
+	_, err := planFolder(filepath.Join(dir, "plain"), ofRun(), nil, nil, true)
 	refusedWith(t, err, exitFiles, "is a file")
-	_, err = planFolder(filepath.Join(dir, "plain", "out"), nil, nil, true)
+	_, err = planFolder(filepath.Join(dir, "plain", "out"), ofRun(), nil, nil, true)
 	refusedWith(t, err, exitFiles, "cannot")
 }
 
@@ -143,7 +143,7 @@ func TestEmptyFolderStaysTheSameFolder(t *testing.T) {
 	dir := lay(t, nil)
 	before, err := os.Stat(dir)
 	require.NoError(t, err)
-	p, err := planFolder(dir, files("a", "1", "sub/b", "2"), nil, false)
+	p, err := planFolder(dir, ofRun(), files("a", "1", "sub/b", "2"), nil, false)
 	require.NoError(t, err)
 	_, err = p.write(context.Background())
 	require.NoError(t, err)
@@ -156,7 +156,7 @@ func TestEmptyFolderStaysTheSameFolder(t *testing.T) {
 
 func TestInterruptLeavesTheOldFolder(t *testing.T) {
 	dir := lay(t, files(resultsName, oursJSON))
-	p, err := planFolder(dir, files(resultsName, "new", "b.csv", "2"), nil, false)
+	p, err := planFolder(dir, ofRun(), files(resultsName, "new", "b.csv", "2"), nil, false)
 	require.NoError(t, err)
 	ctx, cancel := context.WithCancel(context.Background())
 	cancel()
@@ -169,7 +169,7 @@ func TestInterruptLeavesTheOldFolder(t *testing.T) {
 func TestFailureHalfwayLeavesTheOldFolder(t *testing.T) {
 	dir := lay(t, files(resultsName, oursJSON))
 	// The second file needs a folder where the first one lies.
-	p, err := planFolder(dir, files("a", "1", "a/b", "2"), nil, false)
+	p, err := planFolder(dir, ofRun(), files("a", "1", "a/b", "2"), nil, false)
 	require.NoError(t, err)
 	_, err = p.write(context.Background())
 	refusedWith(t, err, exitFiles, "cannot be written")
@@ -181,7 +181,7 @@ func TestLinkedFolderIsReplacedBehindTheLink(t *testing.T) {
 	dir := lay(t, files(resultsName, oursJSON))
 	link := filepath.Join(t.TempDir(), "link")
 	require.NoError(t, os.Symlink(dir, link))
-	p, err := planFolder(link, files("a", "1"), nil, false)
+	p, err := planFolder(link, ofRun(), files("a", "1"), nil, false)
 	require.NoError(t, err)
 	_, err = p.write(context.Background())
 	require.NoError(t, err)
