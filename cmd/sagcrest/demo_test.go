@@ -175,8 +175,8 @@ cover_rule = "reinforced concrete"
 	}
 	// 600 m along the demo's first tangent, over ground that the demo surveyed.
 	const a, b = "{ n = 2025, e = 543.3012701892219 }", "{ n = 2225, e = 889.7114317029974 }"
-	forth := write(a+", "+b, `{ station = 0, elev = 110.5 }, { station = 400, elev = 100 }`, "0+300")
-	back := write(b+", "+a, `{ station = 0, elev = 100 }, { station = 400, elev = 110.5 }`, "0+100")
+	forth := write(a+", "+b, `{ station = 0, elev = 110.5 }, { station = 400, elev = 100 }`, "0+360")
+	back := write(b+", "+a, `{ station = 0, elev = 100 }, { station = 400, elev = 110.5 }`, "0+040")
 
 	ft, bt := forth.Result.Earthwork.Totals, back.Result.Earthwork.Totals
 	assert.InDelta(t, float64(*ft.CutBank), float64(*bt.CutBank), 1e-6)

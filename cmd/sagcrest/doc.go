@@ -26,9 +26,9 @@
 // # Options
 //
 //	--alternative NAME   an alternative of the project instead of its base road (check, run)
-//	--out DIR            write into DIR instead of PROJECT/out (run)
-//	--force              take a folder that is not empty and not ours (run)
-//	--dry-run            compute everything, write nothing, list what would be written (run, new)
+//	--out DIR            write into DIR instead of PROJECT/out (run); write a page (compare)
+//	--force              take a folder that is not empty and not ours (run, compare)
+//	--dry-run            compute everything, write nothing, list what would be written (run, compare, new)
 //	--json               exactly one JSON document on standard output
 //	--plain              one record a line, fields parted by tabs
 //	--quiet              findings and refusals only
@@ -67,7 +67,8 @@
 // The output folder is "out" beside the project file, of an alternative
 // "out-NAME" with every run of other signs than letters and digits as one "-".
 // A folder that holds an earlier run (its results.json says so) is replaced
-// whole. Any other folder that is not empty is refused, unless --force: what
+// whole; so is the folder of an earlier comparison (compare.json) by the next.
+// Any other folder that is not empty is refused, unless --force: what
 // it holds is then kept beside it as DIR.before. A folder that holds the
 // project or its survey is never replaced. The new folder changes places with
 // the old one by renaming, so that nobody sees half a run.

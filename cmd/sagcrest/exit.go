@@ -50,6 +50,9 @@ func fileTrouble(path, message, help string) error {
 	}}}
 }
 
+// faultError is a mistake of the program that came back as an error.
+type faultError struct{ error }
+
 // errFindings says that everything was written, but that findings count against
 // the run (exit 1). The findings themselves are already told.
 var errFindings = errors.New("findings count against this run")

@@ -40,12 +40,19 @@ type plan struct {
 	keep bool
 }
 
-// resultsName is the file that makes a folder ours, resultsSchema the name
-// that must stand in it.
+// mark is the document by which a folder is known as ours: its name, and the
+// schema that must stand in it. A run never takes the folder of a comparison,
+// nor the other way round.
+type mark struct{ name, schema string }
+
+// resultsName and resultsSchema mark the folder of a run.
 const (
 	resultsName   = "results.json"
 	resultsSchema = "sagcrest/results"
 )
+
+func ofRun() mark        { return mark{resultsName, resultsSchema} }
+func ofComparison() mark { return mark{"compare.json", "sagcrest/compare"} }
 
 // outputFolder returns the folder of an alternative beside its project file:
 // "out" for the base road, else "out-NAME" with every run of other signs than
@@ -76,7 +83,7 @@ func plainName(s string) string {
 // planFolder looks at dir and decides what writing files there will do, without
 // touching anything. inputs are the files that the run reads: a folder that
 // holds one of them is never replaced.
-func planFolder(dir string, files []outputFile, inputs []string, force bool) (*plan, error) {
+func planFolder(dir string, ours mark, files []outputFile, inputs []string, force bool) (*plan, error) {
 	p := &plan{dir: dir, files: files}
 	if err := guardInputs(dir, inputs); err != nil {
 		return nil, err
@@ -85,9 +92,9 @@ func planFolder(dir string, files []outputFile, inputs []string, force bool) (*p
 	if err != nil {
 		return nil, err
 	}
-	if len(there) > 0 && !holdsResults(dir) {
+	if len(there) > 0 && !ours.marks(dir) {
 		if !force {
-			return nil, fileTrouble(dir, "the output folder is not empty and holds no results of this program",
+			return nil, fileTrouble(dir, "the output folder is not empty and was not written by this command",
 				"choose another folder with --out, or say --force: what is there now is then kept beside it under another name")
 		}
 		p.keep = true
@@ -153,17 +160,17 @@ func listFolder(dir string) ([]string, error) {
 	return names, nil
 }
 
-// holdsResults reports whether dir was written by an earlier run: whether its
-// results.json says so itself.
-func holdsResults(dir string) bool {
-	data, err := os.ReadFile(filepath.Join(dir, resultsName))
+// marks reports whether dir was written by an earlier call: whether its
+// document says so itself.
+func (m mark) marks(dir string) bool {
+	data, err := os.ReadFile(filepath.Join(dir, m.name))
 	if err != nil {
 		return false
 	}
 	var head struct {
 		Schema string `json:"schema"`
 	}
-	return json.Unmarshal(data, &head) == nil && head.Schema == resultsSchema
+	return json.Unmarshal(data, &head) == nil && head.Schema == m.schema
 }
 
 // guardInputs refuses a folder that holds the project or its survey, since

@@ -50,8 +50,6 @@ func domain() map[string][]string {
 
 // rim lists the packages that read the project and write its results. "domain"
 // stands for every package above, "config/*" for the sub-packages of config.
-// An Outcome carries the project that it was computed from, so whoever may read
-// outcomes may name the types of config too.
 func rim() map[string][]string {
 	const in = "cmd/sagcrest/internal/"
 	return map[string][]string{
@@ -60,11 +58,11 @@ func rim() map[string][]string {
 		"config/quantity": {"domain", "config/diag"},
 		"config/*":        {"domain", "config/diag", "config/quantity"},
 		in + "study":      {"domain", "config", "config/*"},
-		in + "wire":       {"domain", in + "study", "config", "config/diag"},
+		in + "wire":       {"domain", in + "study"},
 		in + "table":      {"domain", in + "study", in + "wire", "config/quantity"},
 		in + "plot":       {"domain", in + "study", in + "wire", "config/quantity"},
 		in + "calc":       {"domain", in + "table", in + "wire", "config/quantity"},
-		in + "report":     {"domain", in + "calc", in + "table", in + "plot", in + "study", in + "wire", "config", "config/quantity"},
+		in + "report":     {"domain", in + "calc", in + "table", in + "plot", in + "study", in + "wire", "config/quantity"},
 		in + "web":        {"domain", in + "calc", in + "table", in + "plot", in + "study", in + "wire", "config/quantity"},
 		"cmd/sagcrest":    {"domain", "config", "config/*", in + "*"},
 	}

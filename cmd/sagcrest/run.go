@@ -122,6 +122,7 @@ func exactly(names ...string) cobra.PositionalArgs {
 func (a *app) leave(err error) int {
 	var usage *usageError
 	var refused *refusal
+	var wrong faultError
 	switch {
 	case err == nil:
 		return exitDone
@@ -132,6 +133,8 @@ func (a *app) leave(err error) int {
 		return exitInterrupted
 	case errors.As(err, &refused):
 		return a.refuse(refused)
+	case errors.As(err, &wrong):
+		return a.fault(wrong)
 	case errors.As(err, &usage):
 		fmt.Fprintln(a.errw, "sagcrest:", usage.message)
 		if usage.hint != "" {
@@ -147,7 +150,7 @@ func (a *app) leave(err error) int {
 // fault reports a mistake of the program itself.
 func (a *app) fault(r any) int {
 	fmt.Fprintln(a.errw, "sagcrest: a fault of the program, not of your project:", r)
-	fmt.Fprintln(a.errw, "nothing was written; please report it with the project file and this line")
+	fmt.Fprintln(a.errw, "please report it with the project file and this line")
 	if a.asked {
 		a.errorDocument(nil)
 	}

@@ -40,7 +40,7 @@ func (a *app) runProject(ctx context.Context, arg string) error {
 	}
 	// A folder that would be refused is refused before the work is done.
 	dir := a.folderFor(p, opened.Project.Alternative)
-	if _, err := planFolder(dir, nil, inputs(opened), a.opt.Force); err != nil {
+	if _, err := planFolder(dir, ofRun(), nil, inputs(opened), a.opt.Force); err != nil {
 		return err
 	}
 	o, err := a.compute(ctx, opened)
@@ -52,7 +52,7 @@ func (a *app) runProject(ctx context.Context, arg string) error {
 	if err != nil {
 		return err
 	}
-	done, aside, err := a.writeFolder(ctx, dir, files, inputs(opened))
+	done, aside, err := a.writeFolder(ctx, dir, ofRun(), files, inputs(opened))
 	if err != nil {
 		return err
 	}
@@ -79,7 +79,7 @@ func (a *app) folderFor(p project, alternative string) string {
 func outputFiles(o *study.Outcome, r *wire.Results) (out []outputFile, err error) {
 	made, err := report.Files(o, r)
 	if err != nil {
-		return nil, fmt.Errorf("making the report: %w", err)
+		return nil, faultError{fmt.Errorf("the report could not be made: %w", err)}
 	}
 	for _, f := range made {
 		out = append(out, outputFile(f))
@@ -88,8 +88,8 @@ func outputFiles(o *study.Outcome, r *wire.Results) (out []outputFile, err error
 }
 
 // writeFolder plans and, unless this is a dry run, writes an output folder.
-func (a *app) writeFolder(ctx context.Context, dir string, files []outputFile, inputs []string) (p *plan, aside string, err error) {
-	if p, err = planFolder(dir, files, inputs, a.opt.Force); err != nil || a.opt.DryRun {
+func (a *app) writeFolder(ctx context.Context, dir string, ours mark, files []outputFile, inputs []string) (p *plan, aside string, err error) {
+	if p, err = planFolder(dir, ours, files, inputs, a.opt.Force); err != nil || a.opt.DryRun {
 		return p, "", err
 	}
 	aside, err = p.write(ctx)

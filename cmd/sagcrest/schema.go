@@ -6,6 +6,7 @@ import (
 	"github.com/spf13/cobra"
 
 	"sagcrest/cmd/sagcrest/internal/wire"
+	"sagcrest/config"
 	"sagcrest/config/diag"
 )
 
@@ -23,8 +24,11 @@ func (a *app) schemaCommand() *cobra.Command {
 				name = args[0]
 			}
 			text, ok := wire.Schema(name)
-			if !ok {
-				return unknown("document", name, wire.Documents())
+			switch {
+			case name == "project":
+				text = config.Schema()
+			case !ok:
+				return unknown("document", name, append([]string{"project"}, wire.Documents()...))
 			}
 			_, err := a.out.Write(text)
 			return err

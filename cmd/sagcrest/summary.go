@@ -191,16 +191,32 @@ func (a *app) tellRun(o *study.Outcome, done *plan, aside, arg string) {
 	a.suggest(o, done, arg)
 }
 
-// tellFolder lists what was written, or would be.
+// tellFolder names the folder and what is in it; a dry run lists what would
+// happen to each file.
 func (a *app) tellFolder(done *plan, aside string) {
-	head := "written"
 	if a.opt.DryRun {
-		head = "would be written"
+		fmt.Fprintf(a.out, "\nwould be written to %s\n", done.dir)
+		a.tellSteps(a.out, done)
+		return
 	}
-	fmt.Fprintf(a.out, "\n%s\n", head)
-	a.tellSteps(a.out, done)
+	var names []string
+	tables, gone := 0, 0
+	for _, s := range done.steps {
+		switch {
+		case s.fate == remove:
+			gone++
+		case filepath.Ext(s.name) == ".csv":
+			tables++
+		default:
+			names = append(names, s.name)
+		}
+	}
+	fmt.Fprintf(a.out, "\nwritten to %s\n  %s and %d tables (*.csv)\n", done.dir, strings.Join(names, ", "), tables)
+	if gone > 0 {
+		fmt.Fprintf(a.out, "  %d files of the earlier run are gone\n", gone)
+	}
 	if aside != "" {
-		fmt.Fprintf(a.out, "  kept      what was there before, now in %s\n", aside)
+		fmt.Fprintf(a.out, "  what was there before is kept in %s\n", aside)
 	}
 }
 

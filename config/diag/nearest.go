@@ -3,17 +3,24 @@ package diag
 // Nearest returns the candidate that is most likely meant by a misspelt word:
 // the one with the fewest letters added, dropped, changed or swapped, at most a
 // third of the word (two for short ones); of equal ones the first; "" when none is
-// near.
+// near. A word of a single letter or of more than 64 is near to none.
 func Nearest(word string, candidates []string) (best string) {
-	limit := max(len([]rune(word))/3, min(2, len([]rune(word))-1))
-	least := limit + 1
+	letters := []rune(word)
+	if len(letters) > longestName {
+		return ""
+	}
+	least := 1 + max(len(letters)/3, min(2, len(letters)-1))
 	for _, c := range candidates {
-		if d := distance([]rune(word), []rune(c)); d < least {
+		if d := distance(letters, []rune(c)); d < least {
 			best, least = c, d
 		}
 	}
 	return best
 }
+
+// longestName is more letters than any name of a key, column or command has;
+// comparing longer words letter by letter would take long for nothing.
+const longestName = 64
 
 // distance is the optimal string alignment distance (Damerau 1964,
 // Levenshtein 1966).

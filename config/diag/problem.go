@@ -3,6 +3,7 @@ package diag
 import (
 	"fmt"
 	"strings"
+	"unicode"
 	"unicode/utf8"
 
 	"sagcrest/profile/finding"
@@ -56,39 +57,49 @@ func (p Problem) String() string {
 	return b.String()
 }
 
-// widest is how many signs of a raw line are shown: a line of a terminal.
+// widest is how many signs of a raw line are shown: a line of a terminal; of a
+// longer one the part around the column.
 const widest = 100
 
 // excerpt returns what is shown of a line, and how many signs stand before the
-// column. Tabs become one space, so that the caret stands right; other control
-// signs and broken text become a replacement sign.
+// column. Tabs become one space, so that the caret stands right; what cannot be
+// printed, such as the controls of a terminal, becomes a replacement sign.
 func excerpt(line string, column int) (text string, before int) {
-	clean := strings.Map(func(r rune) rune {
-		switch {
-		case r == '\t':
-			return ' '
-		case r < ' ' || r == 0x7f || r == utf8.RuneError:
-			return utf8.RuneError
-		}
-		return r
-	}, strings.ToValidUTF8(line, string(utf8.RuneError)))
-	if column > 0 && column-1 <= len(line) {
-		before = utf8.RuneCountInString(strings.ToValidUTF8(line[:column-1], string(utf8.RuneError)))
+	if column > 0 {
+		before = len(signs(line[:min(column-1, len(line))]))
 	}
-	runes := []rune(clean)
+	all := signs(strings.TrimRight(line, " \t\r"))
 	from := 0
-	if before > widest-20 {
-		from = before - widest/2
+	if before > widest*4/5 {
+		from = min(before-widest/2, len(all))
 	}
-	runes = runes[min(from, len(runes)):]
-	tail := ""
-	if len(runes) > widest {
-		runes, tail = runes[:widest], " …"
+	shown := all[from:min(from+widest, len(all))]
+	text = string(shown)
+	if from > 0 {
+		text, before = "… "+text, before+2
 	}
-	return strings.TrimRight(string(runes), " ") + tail, min(before-from, len(runes))
+	if from+len(shown) < len(all) {
+		text += " …"
+	}
+	return text, before - from
 }
 
-// Worst reports whether any problem is an error.
+// signs returns the printable signs that stand for a text, one each.
+func signs(text string) []rune {
+	out := make([]rune, 0, len(text))
+	for _, r := range text { // each broken byte is one replacement sign
+		switch {
+		case r == '\t':
+			r = ' '
+		case !unicode.IsPrint(r):
+			r = utf8.RuneError
+		}
+		out = append(out, r)
+	}
+	return out
+}
+
+// Worst reports whether the worst of the problems is an error.
 func Worst(ps []Problem) (isError bool) {
 	for _, p := range ps {
 		if p.Severity == finding.Error {

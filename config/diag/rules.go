@@ -37,7 +37,7 @@ func Rules() []finding.Rule {
 			"Levels of unknown datum cannot be built from.", "Name the datum, be it \"local levelling\"."),
 		page("U07", "Duplicate point id with different coordinates", "one place for each id",
 			"One of the two points is wrong.", "Correct or rename one of them."),
-		page("U09", "Zero or -9999 elevation taken as ground", "-9999 always; 0.00 where the nearest level that is not 0.00 differs by more than 5 m",
+		page("U09", "Zero or -9999 elevation taken as ground", "-9999 always (so -32768 and -32767, the lowest values of 16-bit numbers); 0.00 where the nearest level in plan that is not 0.00 differs by more than 5 m",
 			"A void would be read as a pit.", "Take the rows out, or mark the no-data value in the file."),
 		page("U14", "Decimal comma, byte order mark or spreadsheet date", "decimal points; ids and stations as they were written",
 			"Columns shift, or ids change.", "Export the file again as plain text with decimal points."),

@@ -1,7 +1,6 @@
 package points
 
 import (
-	"slices"
 	"strings"
 
 	"sagcrest/config/diag"
@@ -22,79 +21,90 @@ func (o Options) unit() float64 {
 	return o.Unit
 }
 
-// Read reads a points file: columns id, northing, easting, elevation and, if
-// declared, code, kind, line, seq; "-" skips one. It returns points in metres,
-// in the order of the file. A row whose kind is not "point" is F09: lines are
-// not read yet, and are never read as if they were not there.
+// Read reads a points file: columns northing, easting, elevation and, if
+// declared, id, code, kind, line, seq; "-" skips one. It returns points in
+// metres, in the order of the file; there is ground only where there is no
+// problem. A row whose kind is not "point", or that belongs to a line and
+// states no kind, is F09: lines are not read yet, and are never read as if they
+// were not there.
 func Read(name string, data []byte, o Options) ([]terrain.Point, []diag.Problem) {
-	f := &file{name: name, order: o.Order}
-	if !f.checkOrder([]string{id, northing, easting, elevation, code, kind, line, seq, skip}, []string{northing, easting, elevation}) {
+	f := &file{name: name, key: "survey.points", order: o.Order}
+	known := []string{id, northing, easting, elevation, code, kind, line, seq, skip}
+	if !f.checkOrder(known, []string{northing, easting, elevation}) || !f.open(data) {
 		return nil, f.list.Problems()
 	}
-	c := cloud{file: f, ids: map[string]place{}}
-	for _, r := range f.body(f.rows(data)) {
-		if f.fits(r) {
-			c.add(r, o.unit())
-		}
-	}
+	c := &cloud{file: f, unit: o.unit(), ids: map[string]int{}}
+	c.id, c.northing, c.easting, c.elevation = f.column(id), f.column(northing), f.column(easting), f.column(elevation)
+	f.body(c.add)
 	c.checkLevels()
 	return c.points, f.list.Problems()
 }
 
-// place is where an id was first seen.
-type place struct {
-	at     terrain.Point
-	number int
-}
-
-// cloud gathers points and what is needed to compare them.
+// cloud gathers points, and where the row of each begins in the file.
 type cloud struct {
 	*file
-	points []terrain.Point
-	rows   []row
-	ids    map[string]place
+	unit                             float64
+	id, northing, easting, elevation int // columns
+	points                           []terrain.Point
+	starts                           []int
+	ids                              map[string]int // index of the first point of an id
 }
 
-func (c *cloud) add(r row, unit float64) {
-	cell := func(column string) int { return slices.Index(c.order, column) }
-	if k := cell(kind); k >= 0 && !strings.EqualFold(r.cells[k], "point") {
-		c.problem("F09", r, k, "take the row out, or wait for breaklines to be read",
-			"a row of kind %q: only points are read so far", r.cells[k])
+func (c *cloud) add(r row) {
+	if !c.isPoint(r) {
 		return
 	}
-	n, okN := c.number(r, cell(northing), unit)
-	e, okE := c.number(r, cell(easting), unit)
-	z, okZ := c.number(r, cell(elevation), unit)
-	if !okN || !okE || !okZ {
-		return
+	n, okN := c.number(r, c.northing, c.unit)
+	e, okE := c.number(r, c.easting, c.unit)
+	z, okZ := c.number(r, c.elevation, c.unit)
+	if okZ && isSign(r.cells[c.elevation]) {
+		c.tellSign(r, c.elevation)
+		okZ = false
 	}
 	p := terrain.Point{E: e, N: n, Z: z, Row: r.number}
-	if k := cell(id); k >= 0 {
-		c.checkID(r, k, p)
+	if c.id >= 0 {
+		c.checkID(r, p, okN && okE && okZ)
 	}
-	c.points = append(c.points, p)
-	c.rows = append(c.rows, r)
+	if okN && okE && okZ {
+		c.points, c.starts = append(c.points, p), append(c.starts, r.start)
+	}
 }
 
-// checkID finds ids that a spreadsheet rewrote, and ids at two places. A row
-// that repeats another to the letter is no contradiction.
-func (c *cloud) checkID(r row, cell int, p terrain.Point) {
-	text := r.cells[cell]
-	if text == "" {
+// isPoint refuses rows that are part of a line.
+func (f *file) isPoint(r row) bool {
+	if k := f.column(kind); k >= 0 {
+		if strings.EqualFold(r.cells[k], "point") {
+			return true
+		}
+		f.tell("F09", r, k, "give the ground by points alone; a kind of \"point\" keeps the row", "a row of kind %q: only points are read so far", r.cells[k])
+		return false
+	}
+	if k := f.column(line); k >= 0 && r.cells[k] != "" {
+		f.tell("F09", r, k, "declare and fill the column kind: \"point\" keeps the row", "a row of the line %q: only points are read so far", r.cells[k])
+		return false
+	}
+	return true
+}
+
+// checkID finds ids that a spreadsheet made of others, and ids at two places
+// (U07). A row that repeats another's place and level contradicts nothing.
+func (c *cloud) checkID(r row, p terrain.Point, sound bool) {
+	text := r.cells[c.id]
+	if madeDate(text) {
+		c.tell("U14", r, c.id, "export the ids as text", "the id %q is a date or a number cut short, as spreadsheets make them", text)
 		return
 	}
-	if looksLikeDate(text) {
-		c.problem("U14", r, cell, "export the ids as text", "the id %q looks like a date or a number that a spreadsheet made of it", text)
+	if text == "" || !sound {
 		return
 	}
-	first, seen := c.ids[text]
+	k, seen := c.ids[text]
 	if !seen {
-		c.ids[text] = place{p, r.number}
+		c.ids[text] = len(c.points)
 		return
 	}
-	if first.at.E != p.E || first.at.N != p.N || first.at.Z != p.Z {
-		c.problem("U07", r, cell, "correct or rename one of them",
+	if q := c.points[k]; q.E != p.E || q.N != p.N || q.Z != p.Z {
+		c.tell("U07", r, c.id, "correct or rename one of them",
 			"id %q stands at N %.3f E %.3f level %.3f m here and at N %.3f E %.3f level %.3f m on line %d",
-			text, p.N, p.E, p.Z, first.at.N, first.at.E, first.at.Z, first.number)
+			text, p.N, p.E, p.Z, q.N, q.E, q.Z, q.Row)
 	}
 }

@@ -313,6 +313,18 @@ func TestCutFiles(t *testing.T) {
 	}
 }
 
+// A chunk whose bytes do not fit their checksum is not believed.
+func TestChecksum(t *testing.T) {
+	var end uint64
+	p := small(func(p *picture) { p.corrupt = func(o, n []uint64) { end = o[0] + n[0] } })
+	whole := p.bytes()
+	whole[end-1] ^= 1
+	r, problems := read(whole)
+	assert.Nil(t, r)
+	require.Len(t, problems, 1)
+	assert.Contains(t, problems[0].Message, "strip or tile 0 at byte 8 is damaged")
+}
+
 func TestCircleOfDirectories(t *testing.T) {
 	p := small(func(p *picture) { p.subfile = 1 })
 	whole := p.bytes()

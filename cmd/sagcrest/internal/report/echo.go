@@ -5,7 +5,6 @@ import (
 	"strings"
 
 	"sagcrest/cmd/sagcrest/internal/table"
-	"sagcrest/config"
 	"sagcrest/config/quantity"
 	"sagcrest/section"
 )
@@ -35,7 +34,7 @@ func (s *sheets) echo() *table.Table {
 	}
 	req := p.Request
 	row("paid by", "%s, every %s label units, key points %s", methodName(string(req.Method)), s.paper.Count(req.PayStep), onOff(req.KeyPoints))
-	row("strip depth, margin", "%s, %s; billed %s", l(req.Stripping.Depth), l(req.Stripping.Margin), stripWords(p.StripBasis))
+	row("strip depth, margin", "%s, %s; billed %s", l(req.Stripping.Depth), l(req.Stripping.Margin), stripWords(string(p.StripBasis)))
 	for _, x := range req.Exclusions {
 		row("exception", "%s to %s: %s", p.Labels.Format(x.Over.From), p.Labels.Format(x.Over.To), x.Reason)
 	}
@@ -62,8 +61,8 @@ func onOff(b bool) string {
 	return "off"
 }
 
-func stripWords(b config.StripBasis) string {
-	if b == config.StripInCut {
+func stripWords(basis string) string {
+	if basis == "in_cut" {
 		return "as excavation"
 	}
 	return "as an item of its own"

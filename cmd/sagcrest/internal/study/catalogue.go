@@ -5,6 +5,7 @@ import (
 	"fmt"
 	"slices"
 
+	"sagcrest/config"
 	"sagcrest/config/diag"
 	"sagcrest/drainage"
 	"sagcrest/earthwork"
@@ -21,7 +22,7 @@ import (
 func Catalogue() []finding.Rule {
 	all := slices.Concat(
 		profile.Rules(), alignment.Rules(), terrain.Rules(), section.Rules(),
-		drainage.Rules(), earthwork.Rules(), diag.Rules(),
+		drainage.Rules(), earthwork.Rules(), config.Rules(), diag.Rules(),
 	)
 	slices.SortStableFunc(all, func(a, b finding.Rule) int { return cmp.Compare(a.Code, b.Code) })
 	return slices.CompactFunc(all, func(a, b finding.Rule) bool { return a.Code == b.Code })
@@ -61,10 +62,13 @@ func (o *Opened) Message(f finding.Finding) string {
 	return fmt.Sprintf(rule.Message, args...)
 }
 
+// Problem is a finding in words at its place in a file.
+type Problem = diag.Problem
+
 // Problem gives a finding its words and its place in the project file.
-func (o *Opened) Problem(f finding.Finding) diag.Problem {
+func (o *Opened) Problem(f finding.Finding) Problem {
 	rule, _ := Rule(f.Code)
-	p := diag.Problem{
+	p := Problem{
 		Code: f.Code, Severity: f.Severity, Key: f.At.Key, ID: f.At.ID,
 		Message: o.Message(f), Help: rule.Mend,
 		Measured: f.Measured, Limit: f.Limit,

@@ -5,8 +5,6 @@ import (
 	"path/filepath"
 
 	"sagcrest/cmd/sagcrest/internal/study"
-	"sagcrest/config"
-	"sagcrest/config/diag"
 	"sagcrest/profile/finding"
 	"sagcrest/profile/station"
 )
@@ -15,7 +13,7 @@ import (
 func Build(o *study.Outcome) *Results {
 	b := builder{o}
 	r := &Results{
-		Head: head("results"), Inputs: inputs(o.Inputs), Alternative: o.Project.Alternative,
+		Head: head("results"), Inputs: inputs(o), Alternative: o.Project.Alternative,
 		Status: "complete", Findings: b.findings(),
 		Result: Result{
 			Alignment: b.alignment(), Profile: b.profile(), Sections: b.sections(),
@@ -37,7 +35,7 @@ func Build(o *study.Outcome) *Results {
 
 // Check makes the document of the check command.
 func Check(o *study.Outcome) *CheckDoc {
-	d := &CheckDoc{Head: head("check"), Inputs: inputs(o.Inputs), Alternative: o.Project.Alternative,
+	d := &CheckDoc{Head: head("check"), Inputs: inputs(o), Alternative: o.Project.Alternative,
 		Findings: builder{o}.findings(), Silent: []string{}}
 	d.Counts = count(d.Findings)
 	for _, c := range o.Silent {
@@ -47,7 +45,7 @@ func Check(o *study.Outcome) *CheckDoc {
 }
 
 // Failed makes the document of a run that ended early.
-func Failed(problems []diag.Problem) *ErrorDoc {
+func Failed(problems []study.Problem) *ErrorDoc {
 	d := &ErrorDoc{Head: head("error"), Findings: []Finding{}}
 	for _, p := range problems {
 		rule, _ := study.Rule(p.Code)
@@ -78,8 +76,8 @@ func count(fs []Finding) (c Counts) {
 	return c
 }
 
-func inputs(in []config.Input) (out []Input) {
-	for _, i := range in {
+func inputs(o *study.Outcome) (out []Input) {
+	for _, i := range o.Inputs {
 		out = append(out, Input{Path: i.Path, SHA256: i.SHA256, Bytes: int(i.Bytes)})
 	}
 	return out

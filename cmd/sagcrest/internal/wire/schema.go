@@ -6,8 +6,6 @@ import (
 	"strings"
 
 	"github.com/invopop/jsonschema"
-
-	"sagcrest/config"
 )
 
 // documents lists what Schema knows, in the order in which it is offered.
@@ -25,20 +23,16 @@ func documents() []struct {
 
 // Documents returns the names that Schema knows.
 func Documents() []string {
-	out := []string{"project"}
+	var out []string
 	for _, d := range documents() {
 		out = append(out, d.name)
 	}
 	return out
 }
 
-// Schema returns the JSON Schema of the project file or of a document; ok is
-// false for an unknown name. Unknown keys are allowed in documents, as they may
+// Schema returns the JSON Schema of a document; ok is false for an unknown name. Unknown keys are allowed in documents, as they may
 // grow.
 func Schema(name string) (text []byte, ok bool) {
-	if name == "project" {
-		return config.Schema(), true
-	}
 	for _, d := range documents() {
 		if d.name != name {
 			continue
