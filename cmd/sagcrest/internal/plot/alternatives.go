@@ -43,42 +43,44 @@ func (a Alternatives) Draw() (string, error) {
 	f := frame{x0, x1, lo - pad, hi + pad, 50, 30, 1035, 320}
 	s.grid(f, a.Label, a.Level)
 	s.line(pen{0.8, []vg.Length{3, 3}, grey}, f.path(a.Ground)...)
-	if y, ok := on(a.Ground, x0+(x1-x0)*0.97); ok {
-		s.text(9, right, f.px(x0+(x1-x0)*0.97), f.py(y)-12, "ground")
-	}
 	pens := dashes()
 	for i, l := range a.Lines {
 		s.line(pens[i%len(pens)], f.path(l.Line)...)
+	}
+	for i := range len(a.Lines) + 1 {
 		a.name(s, f, i)
 	}
 	s.text(9, left, f.left, s.h-12, fmt.Sprintf("levels in %s, heights %.0f times exaggerated", a.LevelUnit, f.exaggeration()))
 	return s.svg(a.ID, a.Title, "Grade lines of the alternatives over each other and the ground.")
 }
 
-// name writes the name of a line where it lies farthest from the others, with a
-// sample of its dash.
+// name writes the name of a line where it lies farthest from the others, on the
+// side away from the nearest of them. Every line has places of its own, so that
+// no two names fall on each other.
 func (a Alternatives) name(s *sheet, f frame, i int) {
-	best, at := -1.0, f.x0
-	for k := 1; k < 24; k++ {
-		x := f.x0 + (f.x1-f.x0)*float64(k)/24
-		y, ok := on(a.Lines[i].Line, x)
-		if !ok {
+	lines := append([]Named{{"ground", a.Ground}}, a.Lines...)
+	const places = 60
+	best, at, up := -1.0, f.x0, true
+	for k := 2; k < places-1; k++ {
+		x := f.x0 + (f.x1-f.x0)*float64(k)/places
+		y, ok := on(lines[i].Line, x)
+		if !ok || k/3%len(lines) != i {
 			continue
 		}
-		near := math.Inf(1)
-		for j, o := range a.Lines {
-			if z, ok := on(o.Line, x); ok && j != i {
-				near = math.Min(near, math.Abs(z-y))
+		near, above := math.Inf(1), true
+		for j, o := range lines {
+			if z, ok := on(o.Line, x); ok && j != i && math.Abs(z-y) < near {
+				near, above = math.Abs(z-y), y >= z
 			}
 		}
 		if near > best && !math.IsInf(near, 1) {
-			best, at = near, x
+			best, at, up = near, x, above
 		}
 	}
-	y, _ := on(a.Lines[i].Line, at)
-	dy := 7.0
-	if i%2 == 1 {
-		dy = -14
+	y, _ := on(lines[i].Line, at)
+	dy := 6.0
+	if !up {
+		dy = -13
 	}
-	s.text(9, middle, f.px(at), f.py(y)+dy, a.Lines[i].Name)
+	s.text(9, middle, f.px(at), f.py(y)+dy, lines[i].Name)
 }
