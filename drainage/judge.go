@@ -25,8 +25,9 @@ func (l *Laid) judge(r *section.Road, p pages) (out []finding.Finding) {
 		l.Verdict = Withheld
 	}
 	if d := l.Culvert.CoverDatum; l.Rule.ID != "project" && d != "" && d != l.Rule.Datum {
+		// Which of the two is meant is unknown, so nothing more is judged.
 		l.Verdict = Withheld
-		out = append(out, p.otherDatum(l))
+		return append(out, p.otherDatum(l))
 	}
 	if !l.CoverOK {
 		l.Verdict = Short

@@ -66,57 +66,10 @@ func newCurve(pvi []PVI, i int) Curve {
 	if v.Length == 0 {
 		v.Shape = Break
 	}
-	switch {
-	case v.A() > 0:
-		v.Kind = Sag
-	case v.A() < 0:
-		v.Kind = Crest
-	default:
-		v.Kind = None
-	}
-	if change > 0 {
-		v.K = v.Length / (100 * change)
-	}
-	half := v.Length / 2
-	v.PVC = Point{b.At - station.Station(half), b.Elev - v.G1*half}
-	v.PVT = Point{b.At + station.Station(half), b.Elev + v.G2*half}
-	v.Turning = v.turning()
+	solved := NewVertical(AtPVI, v.PVI, v.G1, v.G2, v.Length/2, v.Length/2)
+	v.PVC, v.PVT, v.Turning, v.Kind = solved.PVC, solved.PVT, solved.Turning(), solved.Kind()
+	v.K, _ = solved.K()
 	return v
-}
-
-// turning returns the place where the grade is zero: x = −g1·L/A from the PVC.
-// The ends belong to the curve. A break turns at the PVI where the sign changes.
-func (c Curve) turning() *Point {
-	if c.A() == 0 {
-		return nil
-	}
-	if c.Length == 0 {
-		if c.G1*c.G2 < 0 {
-			p := c.PVI
-			return &p
-		}
-		return nil
-	}
-	x := -c.G1 * c.Length / c.A()
-	if x < 0 || x > c.Length {
-		return nil
-	}
-	return &Point{c.PVC.At + station.Station(x), c.PVC.Elev + c.G1*x/2}
-}
-
-// At returns level and grade at a station by the curve's own parabola, also
-// beyond its ends.
-func (c Curve) At(s station.Station) (z, g float64) {
-	x := float64(s - c.PVC.At)
-	if c.Length == 0 {
-		g = c.G1
-		if x >= 0 {
-			g = c.G2
-		}
-		return c.PVC.Elev + g*x, g
-	}
-	r := c.A() / c.Length
-	return c.PVC.Elev + c.G1*x + r/2*x*x, c.G1 + r*x
 }
 
 // Curves returns what stands at every interior PVI, in order.
