@@ -14,6 +14,7 @@
 //	sagcrest run PROJECT        the main job; writes PROJECT/out
 //	sagcrest compare PROJECT    every alternative of a project on one basis, ranked
 //	sagcrest compare A B        two runs or projects, line by line
+//	sagcrest calc TOPIC …       one desk calculation with its working
 //	sagcrest explain CODE       what a finding means and how to mend it
 //	sagcrest schema [DOCUMENT]  JSON Schema of the project file or of an output document
 //	sagcrest completion SHELL   completion for bash, zsh or fish
@@ -41,6 +42,20 @@
 // the option of that name where the flag is not given. NO_COLOR, TERM=dumb and
 // an output that is no terminal switch bold letters off too. No variable and
 // no option changes a number of the project: those stand in its file.
+//
+// # Desk calculations
+//
+//	sagcrest calc curve pvc='{"station": 10000, "elev": 1000}' g1=-4 g2=2 length=500
+//	sagcrest calc sight kind=crest sight=185m g1=2 g2=-3.75
+//	sagcrest calc arc degree=5-37-00 delta=42-15-00 --units us
+//	sagcrest calc spiral - < inputs.json
+//	sagcrest calc --list
+//
+// Inputs are name=value, lists and objects as JSON, or one JSON object on
+// standard input with "-". Bare numbers are in metres, km/h, percent and
+// degrees, under --units us in feet, mile/h, percent and degrees; a text may
+// carry its unit. The working prints formula, numbers put in, result and
+// source; --json prints the same as steps. What cannot be ends with 3.
 //
 // # Exit codes
 //

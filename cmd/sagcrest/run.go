@@ -62,7 +62,7 @@ func (a *app) commands() *cobra.Command {
 		return err
 	}
 	root.AddCommand(a.newCommand(), a.checkCommand(), a.runCommand(), a.compareCommand(),
-		a.explainCommand(), a.schemaCommand(), completionCommand())
+		a.calcCommand(), a.explainCommand(), a.schemaCommand(), completionCommand())
 	root.CompletionOptions.DisableDefaultCmd = true
 	root.SetHelpCommand(manualCommand())
 	return root

@@ -2,18 +2,10 @@ package terrain
 
 import "sagcrest/profile/finding"
 
-// Rules lists the findings that a triangulation raises.
+// Rules lists the findings that a triangulation raises of its own; F02, a survey
+// that makes no surface, has the page of every file that cannot be used.
 func Rules() []finding.Rule {
 	return []finding.Rule{
-		{
-			Code: "F02", Default: finding.Error,
-			Title:   "The survey makes no surface",
-			Message: "the survey makes no surface: %v",
-			Formula: "at least three points that do not lie on one line, every coordinate and level a finite number within ±1e8 m",
-			Source:  "common practice",
-			Effect:  "there is no ground, so nothing can be computed",
-			Mend:    "correct the row that is named, or add points beside the line",
-		},
 		{
 			Code: "U08", Default: finding.Warning,
 			Title:   "One place, two levels",
@@ -28,5 +20,5 @@ func Rules() []finding.Rule {
 
 // noSurface returns the finding for points that no surface can be made of.
 func noSurface(why string) []finding.Finding {
-	return []finding.Finding{{Code: "F02", Severity: finding.Error, Args: []any{why}}}
+	return []finding.Finding{{Code: "F02", Severity: finding.Error, Args: []any{"the survey makes no surface: " + why}}}
 }

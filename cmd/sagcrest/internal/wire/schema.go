@@ -17,7 +17,7 @@ func documents() []struct {
 		name string
 		doc  any
 	}{
-		{"results", Results{}}, {"check", CheckDoc{}}, {"compare", CompareDoc{}}, {"error", ErrorDoc{}},
+		{"results", Results{}}, {"check", CheckDoc{}}, {"compare", CompareDoc{}}, {"calc", CalcDoc{}}, {"error", ErrorDoc{}},
 	}
 }
 
