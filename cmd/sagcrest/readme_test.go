@@ -74,10 +74,24 @@ func readmeCalls(text string) (calls []readmeCall) {
 	return calls
 }
 
-// words splits a command line at spaces; quotes hold a word together.
+// words splits a command line at spaces, as a shell does: quotes of either kind
+// hold a word together.
 func words(line string) (out []string) {
-	for _, m := range regexp.MustCompile(`"([^"]*)"|(\S+)`).FindAllStringSubmatch(line, -1) {
-		out = append(out, m[1]+m[2])
+	word, quote, open := "", rune(0), false
+	for _, r := range line + " " {
+		switch {
+		case quote != 0 && r == quote:
+			quote = 0
+		case quote == 0 && (r == '"' || r == '\''):
+			quote, open = r, true
+		case quote == 0 && r == ' ':
+			if open || word != "" {
+				out = append(out, word)
+			}
+			word, open = "", false
+		default:
+			word += string(r)
+		}
 	}
 	return out
 }
