@@ -41,6 +41,7 @@ func Topics() []Topic {
 		topic("sight", "Sight distance", "stopping distance, lengths and K that sight asks for, clearance inside a curve", sight),
 		topic("arc", "Horizontal alignment", "circular arc from any two of its figures", arc),
 		topic("spiral", "Horizontal alignment", "clothoid, and the curve between two of them", spiral),
+		topic("superelevation", "Horizontal alignment", "least radius, superelevation, run-off and run-out", superelevation),
 		topic("slope_stake", "Setting out", "where a side slope meets the ground", slopeStake),
 		topic("table", "Tables", "every table of coefficients that the program carries", tableTopic),
 	}
