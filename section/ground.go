@@ -41,8 +41,6 @@ type Scratch struct {
 	cursor   terrain.Cursor
 	vertices []terrain.Vertex
 	gaps     []terrain.Gap
-	points   []Point
-	side     []Point
 }
 
 // surfaceGround looks at a surface through the alignment.

@@ -30,6 +30,8 @@ type Element struct {
 	Start                orb.Point
 	Azimuth              float64
 	PI                   int
+
+	rule *rule
 }
 
 // Alignment is a chain of elements without gaps or kinks.
@@ -38,6 +40,7 @@ type Alignment struct {
 	rows     []PIRow
 	gaps     []float64 // from each PI to the next, for the checks
 	length   station.Station
+	rule     *rule
 }
 
 // leftOver is the shortage of tangent in metres that still counts as none: the
@@ -51,7 +54,8 @@ func New(pi []PI) (*Alignment, []finding.Finding) {
 	if found := checkPoints(pi); found != nil {
 		return nil, found
 	}
-	a := &Alignment{rows: solveAll(pi)}
+	rule := newRule()
+	a := &Alignment{rows: rule.solveAll(pi), rule: rule}
 	for i := 1; i < len(pi); i++ {
 		a.gaps = append(a.gaps, math.Hypot(pi[i].E-pi[i-1].E, pi[i].N-pi[i-1].N))
 	}
@@ -73,12 +77,12 @@ func New(pi []PI) (*Alignment, []finding.Finding) {
 }
 
 // solveAll solves the interior PIs.
-func solveAll(pi []PI) (rows []PIRow) {
+func (q *rule) solveAll(pi []PI) (rows []PIRow) {
 	for i := 1; i < len(pi)-1; i++ {
 		prev, p, next := pi[i-1], pi[i], pi[i+1]
 		before := azimuth(orb.Point{prev.E, prev.N}, orb.Point{p.E, p.N})
 		after := azimuth(orb.Point{p.E, p.N}, orb.Point{next.E, next.N})
-		rows = append(rows, solve(i, p, before, after))
+		rows = append(rows, q.solve(i, p, before, after))
 	}
 	return rows
 }
@@ -88,11 +92,12 @@ func (a *Alignment) tangent(from, to orb.Point) {
 	if d <= leftOver {
 		return
 	}
-	a.add(Element{Tangent, station.Interval{}, math.Inf(1), math.Inf(1), from, azimuth(from, to), -1}, d)
+	a.add(Element{Kind: Tangent, RadiusFrom: math.Inf(1), RadiusTo: math.Inf(1), Start: from, Azimuth: azimuth(from, to), PI: -1}, d)
 }
 
 // add appends an element of the given length.
 func (a *Alignment) add(e Element, length float64) {
+	e.rule = a.rule
 	e.Over = station.Interval{From: a.length, To: a.length + station.Station(length)}
 	a.elements = append(a.elements, e)
 	a.length = e.Over.To
@@ -117,7 +122,7 @@ func (a *Alignment) curve(r PIRow, at orb.Point) orb.Point {
 		if p.length <= 0 {
 			continue
 		}
-		e := Element{p.kind, station.Interval{}, p.from, p.to, at, az, r.Index}
+		e := Element{Kind: p.kind, RadiusFrom: p.from, RadiusTo: p.to, Start: at, Azimuth: az, PI: r.Index}
 		a.add(e, p.length)
 		pose := a.elements[len(a.elements)-1].at(p.length)
 		at, az = pose.XY, pose.Azimuth
@@ -159,7 +164,7 @@ func (e *Element) at(l float64) Pose {
 		half := k * l / 2
 		p.XY = ahead(e.Start, e.Azimuth+half, l*sinc(half))
 	default:
-		n, x := run(e.Azimuth, k, c, l)
+		n, x := e.rule.run(e.Azimuth, k, c, l)
 		p.XY = orb.Point{e.Start[0] + x, e.Start[1] + n}
 	}
 	return p

@@ -139,20 +139,23 @@ func grow(want float64, f func(float64) float64) float64 {
 // Abscissa of the shifted centre. Parameter is √(R·L).
 type Spiral struct {
 	Radius, Length, Parameter, Angle, X, Y, Shift, Abscissa float64
+
+	rule *rule
 }
 
 // NewSpiral returns the clothoid of a radius and a length (T. F. Hickerson,
 // Route Location and Design).
 func NewSpiral(radius, length float64) Spiral {
-	s := spiralAt(length, radius)
-	return Spiral{radius, length, math.Sqrt(radius * length), s.angle, s.x, s.y, s.shift, s.abscissa}
+	q := newRule()
+	s := q.spiralAt(length, radius)
+	return Spiral{radius, length, math.Sqrt(radius * length), s.angle, s.x, s.y, s.shift, s.abscissa, q}
 }
 
 // At returns the point of the clothoid a length l from its start, and the angle
 // turned by there.
 func (s Spiral) At(l float64) (x, y, angle float64) {
 	c := 1 / (s.Radius * s.Length)
-	x, y = run(0, 0, c, l)
+	x, y = s.rule.run(0, 0, c, l)
 	return x, y, c * l * l / 2
 }
 

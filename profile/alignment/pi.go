@@ -32,13 +32,13 @@ type PIRow struct {
 func (r PIRow) Length() float64 { return r.PI.SpiralIn + r.ArcLength + r.PI.SpiralOut }
 
 // solve computes one PI from the directions before and after it.
-func solve(index int, p PI, before, after float64) PIRow {
+func (q *rule) solve(index int, p PI, before, after float64) PIRow {
 	r := PIRow{Index: index, PI: p, AzimuthIn: before, Deflection: turn(after - before)}
 	if p.Radius <= 0 {
 		return r
 	}
 	d, R := math.Abs(r.Deflection), p.Radius
-	in, out := spiralAt(p.SpiralIn, R), spiralAt(p.SpiralOut, R)
+	in, out := q.spiralAt(p.SpiralIn, R), q.spiralAt(p.SpiralOut, R)
 	r.AngleIn, r.AngleOut = in.angle, out.angle
 	r.ShiftIn, r.ShiftOut = in.shift, out.shift
 	r.ArcAngle = math.Max(d-in.angle-out.angle, 0)

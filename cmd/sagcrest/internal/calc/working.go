@@ -25,9 +25,8 @@ func (w *working) step(symbol, formula, substituted string, value float64, unit,
 	w.steps = append(w.steps, Step{symbol, formula, substituted, value, unit, source})
 }
 
-// length, speed and k name the units of the call.
+// length and k name the units of the call.
 func (w *working) length() string { return w.pick("m", "ft") }
-func (w *working) speed() string  { return w.pick("km/h", "mile/h") }
 func (w *working) k() string      { return w.pick("m/%", "ft/%") }
 
 func (w *working) pick(metric, us string) string {

@@ -77,18 +77,6 @@ func (s *sheet) line(p pen, pts ...vg.Point) {
 	s.c.Stroke(path)
 }
 
-// area fills a polygon.
-func (s *sheet) area(ink color.RGBA, pts ...vg.Point) {
-	var path vg.Path
-	path.Move(pts[0])
-	for _, q := range pts[1:] {
-		path.Line(q)
-	}
-	path.Close()
-	s.c.SetColor(ink)
-	s.c.Fill(path)
-}
-
 // dot draws a small disc.
 func (s *sheet) dot(ink color.RGBA, at vg.Point, radius float64) {
 	var path vg.Path
