@@ -156,19 +156,19 @@ func TestPlatformOnVolcano(t *testing.T) {
 	p.hold(t, r)
 }
 
-// Drumlins in New York state, 2 km from north to south; the centre line runs
-// over cell centres, whose values GDAL 3.6.2 (gdallocationinfo) reads as below.
-func TestPlatformOnDrumlins(t *testing.T) {
-	path, err := filepath.Abs(filepath.Join(shared(t, "terrain"), "ny_drumlins_dem_2m.tif"))
+// onRealGround runs a platform over a raster beside the project, holds it against the
+// summation, and its centre line, which runs over cell centres, against values
+// that GDAL 3.6.2 (gdallocationinfo) reads, by distance.
+func onRealGround(t *testing.T, file string, p platform, col, row float64, gdal map[float64]float64) {
+	path, err := filepath.Abs(filepath.Join(shared(t, "terrain"), file))
 	require.NoError(t, err)
-	grid := readGrid(t, path)
-	p := platform{grid: grid, e: grid.West + 250*2, n: grid.North - 20*2, dn: -1, length: 2000, half: 12, z: 140, pay: 20}
+	p.grid = readGrid(t, path)
+	cell := math.Max(p.grid.Cell, p.grid.CellE)
+	p.e, p.n = p.grid.West+col*cell, p.grid.North-row*cell
 	project := filepath.Join(t.TempDir(), "road.toml")
 	require.NoError(t, os.WriteFile(project, []byte(p.project(path)), 0o644))
 	r := runPlatform(t, project)
 	p.hold(t, r)
-	gdal := map[float64]float64{0: 130.693161010742, 200: 130.707489013672, 600: 133.001159667969,
-		1000: 142.147766113281, 1500: 159.541900634766, 2000: 135.210266113281}
 	for _, s := range r.Result.Sections {
 		if want, ok := gdal[s.Place.Distance]; ok {
 			assert.InDelta(t, want, s.GroundElev, 1e-6)
@@ -178,23 +178,16 @@ func TestPlatformOnDrumlins(t *testing.T) {
 	assert.Empty(t, gdal, "every one was met")
 }
 
-// West Vancouver, a short road from west to east along row 222.
+// Drumlins in New York state, 2 km from north to south.
+func TestPlatformOnDrumlins(t *testing.T) {
+	onRealGround(t, "ny_drumlins_dem_2m.tif", platform{dn: -1, length: 2000, half: 12, z: 140, pay: 20}, 250, 20,
+		map[float64]float64{0: 130.693161010742, 200: 130.707489013672, 600: 133.001159667969,
+			1000: 142.147766113281, 1500: 159.541900634766, 2000: 135.210266113281})
+}
+
+// West Vancouver, a short road from west to east.
 func TestPlatformOnVancouver(t *testing.T) {
-	path, err := filepath.Abs(filepath.Join(shared(t, "terrain"), "vancouver_dtm_1m.tif"))
-	require.NoError(t, err)
-	grid := readGrid(t, path)
-	p := platform{grid: grid, e: grid.West + 100, n: grid.North - 222, de: 1, length: 400, half: 8, z: 67, pay: 20}
-	project := filepath.Join(t.TempDir(), "road.toml")
-	require.NoError(t, os.WriteFile(project, []byte(p.project(path)), 0o644))
-	r := runPlatform(t, project)
-	p.hold(t, r)
-	gdal := map[float64]float64{0: 68.6719970703125, 80: 68.984001159668, 160: 67.0149993896484,
-		240: 65.5619964599609, 320: 65.4140014648438, 400: 69.177001953125}
-	for _, s := range r.Result.Sections {
-		if want, ok := gdal[s.Place.Distance]; ok {
-			assert.InDelta(t, want, s.GroundElev, 1e-6)
-			delete(gdal, s.Place.Distance)
-		}
-	}
-	assert.Empty(t, gdal, "every one was met")
+	onRealGround(t, "vancouver_dtm_1m.tif", platform{de: 1, length: 400, half: 8, z: 67, pay: 20}, 100, 222,
+		map[float64]float64{0: 68.6719970703125, 80: 68.984001159668, 160: 67.0149993896484,
+			240: 65.5619964599609, 320: 65.4140014648438, 400: 69.177001953125})
 }
