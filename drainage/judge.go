@@ -12,29 +12,27 @@ const coverTouch = 1e-9
 
 // judge measures the cover over every barrel and holds the least against what
 // is required.
-func (l *Laid) judge(r *section.Road, p pages) (out []finding.Finding) {
+func (l *Laid) judge(r *section.Road, p pages) []finding.Finding {
+	if d := l.Culvert.CoverDatum; l.Rule.ID != "project" && d != "" && d != l.Rule.Datum {
+		// Which of the two is meant is unknown, so nothing is judged.
+		return []finding.Finding{p.otherDatum(l)}
+	}
 	governing, bends, ok := l.leastOver(r)
 	if !ok {
-		return append(out, p.offRoad(r, r.Over(), "station"))
+		return []finding.Finding{p.offRoad(r, r.Over(), "station")}
 	}
 	l.Judged = true
 	l.Profile = l.rows(governing, bends)
 	l.CoverOK = l.Least.Cover() >= l.Required-coverTouch
-	l.Verdict = OK
-	if l.InletSide == 0 || l.Drop < -sameLevel {
-		l.Verdict = Withheld
+	if l.InletSide != 0 && l.Drop >= -sameLevel {
+		l.Verdict = OK
 	}
-	if d := l.Culvert.CoverDatum; l.Rule.ID != "project" && d != "" && d != l.Rule.Datum {
-		// Which of the two is meant is unknown, so nothing more is judged.
-		l.Verdict = Withheld
-		return append(out, p.otherDatum(l))
+	if l.CoverOK {
+		return nil
 	}
-	if !l.CoverOK {
-		l.Verdict = Short
-		l.Mends = l.mends(r)
-		out = append(out, p.short(l))
-	}
-	return out
+	l.Verdict = Short
+	l.Mends = l.mends(r)
+	return []finding.Finding{p.short(l)}
 }
 
 // leastOver finds the least cover over all barrels, and returns the barrel that
