@@ -8,22 +8,23 @@ const baseName = "base"
 // fileAlternative is another road, as what differs from the base. Survey,
 // prices and units are known here only to be refused where they differ.
 type fileAlternative struct {
-	Name           string          `json:"name" jsonschema:"required"`
-	Units          string          `json:"units" jsonschema:"enum=metric,enum=international feet,enum=us survey feet,enum=ft" jsonschema_description:"may not differ from the base"`
-	Survey         *fileSurvey     `json:"survey" jsonschema_description:"may not differ from the base"`
-	Alignment      *fileAlignment  `json:"alignment"`
-	Profile        *fileProfile    `json:"profile"`
-	TieIn          []fileTieIn     `json:"tie_in"`
-	Clearance      []fileClearance `json:"clearance"`
-	TypicalSection []fileTypical   `json:"typical_section"`
-	Stratum        []fileStratum   `json:"stratum"`
-	Material       []fileMaterial  `json:"material"`
-	Earthwork      *fileEarthwork  `json:"earthwork"`
-	Prices         *filePrices     `json:"prices" jsonschema_description:"may not differ from the base"`
-	Culvert        []fileCulvert   `json:"culvert"`
-	RightOfWay     *fileRightOfWay `json:"right_of_way"`
-	Exclude        []fileExclude   `json:"exclude"`
-	ExtraQuantity  []fileExtra     `json:"extra_quantity"`
+	Name           string           `json:"name" jsonschema:"required"`
+	Units          string           `json:"units" jsonschema:"enum=metric,enum=international feet,enum=us survey feet,enum=ft" jsonschema_description:"may not differ from the base"`
+	Survey         *fileSurvey      `json:"survey" jsonschema_description:"may not differ from the base"`
+	Alignment      *fileAlignment   `json:"alignment"`
+	Profile        *fileProfile     `json:"profile"`
+	TieIn          []fileTieIn      `json:"tie_in"`
+	Clearance      []fileClearance  `json:"clearance"`
+	TypicalSection []fileTypical    `json:"typical_section"`
+	Superelevation []fileCrossfalls `json:"superelevation"`
+	Stratum        []fileStratum    `json:"stratum"`
+	Material       []fileMaterial   `json:"material"`
+	Earthwork      *fileEarthwork   `json:"earthwork"`
+	Prices         *filePrices      `json:"prices" jsonschema_description:"may not differ from the base"`
+	Culvert        []fileCulvert    `json:"culvert"`
+	RightOfWay     *fileRightOfWay  `json:"right_of_way"`
+	Exclude        []fileExclude    `json:"exclude"`
+	ExtraQuantity  []fileExtra      `json:"extra_quantity"`
 }
 
 // merge lays an alternative over the base: a table merges by key, everything

@@ -146,7 +146,8 @@ func (r *reading) project() *Project {
 		Survey: r.survey(f.Survey), Alignment: r.alignment(f.Alignment),
 		PVI: r.profile(f.Profile), CurveTable: r.curveTable(f.Profile), TieIns: r.tieIns(f.TieIn),
 		Obstacles: r.obstacles(f.Clearance), Typicals: r.typicals(f.TypicalSection), Strata: r.strata(f.Stratum),
-		Materials: r.materials(f.Material), Prices: r.prices(f.Prices), HasPrices: f.Prices != nil,
+		Superelevation: crossfalls(f.Superelevation),
+		Materials:      r.materials(f.Material), Prices: r.prices(f.Prices), HasPrices: f.Prices != nil,
 		Culverts: r.culverts(f.Culvert), RightOfWay: r.rightOfWay(f.RightOfWay), Accepts: r.accepts(f.Accept),
 	}
 	if f.Profile != nil {

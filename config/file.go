@@ -17,6 +17,7 @@ type fileProject struct {
 	TieIn          []fileTieIn       `json:"tie_in"`
 	Clearance      []fileClearance   `json:"clearance"`
 	TypicalSection []fileTypical     `json:"typical_section" jsonschema:"required"`
+	Superelevation []fileCrossfalls  `json:"superelevation" jsonschema_description:"crossfalls by station, linear in between"`
 	Stratum        []fileStratum     `json:"stratum"`
 	Material       []fileMaterial    `json:"material"`
 	Earthwork      *fileEarthwork    `json:"earthwork"`

@@ -50,7 +50,7 @@ func fields(t reflect.Type) []field {
 func unbuilt(path string) bool {
 	path = strings.TrimPrefix(counts.ReplaceAllString(path, ""), "alternative.")
 	switch path {
-	case "superelevation", "superelevation_rule", "widening", "point",
+	case "superelevation_rule", "widening", "point",
 		"haul", "borrow", "waste", "barrier", "rainfall", "inlet", "ditch",
 		"survey.lidar", "alignment.equations",
 		"alignment.pi.degree", "alignment.pi.definition", "alignment.pi.spiral_in", "alignment.pi.spiral_out",

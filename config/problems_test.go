@@ -115,7 +115,9 @@ func blunders() []blunder {
 		{"order of a grid", `points = "survey/points.csv"`, `grid = "g.asc"`, "F08", "survey.order", ""},
 		{"place twice", `at = "0+700"`, `at = "0+700"` + n + `from = "0+600"`, "F08", "extra_quantity[0].at", `"0+700"`},
 		// F09: not built yet.
-		{"superelevation", "[[stratum]]", "[[superelevation]]\nat = \"0+385\"\n[[stratum]]", "F09", "superelevation", "superelevation"},
+		{"widening", "[[stratum]]", "[[widening]]\nat = \"0+385\"\n[[stratum]]", "F09", "widening", "widening"},
+		{"row of superelevation without a key", "[[stratum]]", "[[superelevation]]\nat = \"0+385\"\nleft_lane = 0.0\nright_lane = 0.0\nleft_shoulder = 0.0\n[[stratum]]", "F05", "superelevation[0].right_shoulder", "superelevation"},
+		{"superelevation in percent", "[[stratum]]", "[[superelevation]]\nat = \"0+385\"\nleft_lane = 6\nright_lane = 0.0\nleft_shoulder = 0.0\nright_shoulder = 0.0\n[[stratum]]", "F06", "superelevation[0].left_lane", "6"},
 		{"station equations", `start = "0+100"`, `start = "0+100"` + n + "equations = []", "F09", "alignment.equations", "equations"},
 		{"degree of curve", `radius = "300 m", spiral`, `degree = 4, radius = "300 m", spiral`, "F09", "alignment.pi[1].degree", "degree"},
 		{"curve to be solved", `length = "260 m" },` + n, `length = "solve" },` + n, "F09", "profile.pvi[1].length", `"solve"`},

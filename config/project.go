@@ -40,6 +40,8 @@ type Project struct {
 
 	Typicals []section.Typical
 	Strata   []section.Stratum
+	// Superelevation is the table, in the order of the file.
+	Superelevation []section.Crossfalls
 
 	Materials []earthwork.Material
 	// Request lacks CulvertStations, which follow from the ground.

@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"math"
 
+	"sagcrest/profile/station"
 	"sagcrest/section"
 )
 
@@ -57,6 +58,26 @@ type fileLayer struct {
 	Name      string `json:"name" jsonschema:"required"`
 	Thickness length `json:"thickness" jsonschema:"required" range:"(0,10]"`
 	Bound     bool   `json:"bound" jsonschema:"required" jsonschema_description:"bound by bitumen or cement"`
+}
+
+// A row of the superelevation table; every key is needed, for an absent one might
+// mean level or the section's own.
+type fileCrossfalls struct {
+	At            place `json:"at" jsonschema:"required" range:"[-10000000,10000000]"`
+	LeftLane      ratio `json:"left_lane" jsonschema:"required" range:"[-0.5,0.5]" jsonschema_description:"rise per metre to the right, as all four"`
+	RightLane     ratio `json:"right_lane" jsonschema:"required" range:"[-0.5,0.5]"`
+	LeftShoulder  ratio `json:"left_shoulder" jsonschema:"required" range:"[-0.5,0.5]"`
+	RightShoulder ratio `json:"right_shoulder" jsonschema:"required" range:"[-0.5,0.5]"`
+}
+
+// crossfalls copies the table. Whether it fits the road shows only against its
+// length and sections.
+func crossfalls(rows []fileCrossfalls) (out []section.Crossfalls) {
+	for _, f := range rows {
+		out = append(out, section.Crossfalls{At: station.Station(f.At.si), LeftLane: f.LeftLane.si, RightLane: f.RightLane.si,
+			LeftShoulder: f.LeftShoulder.si, RightShoulder: f.RightShoulder.si})
+	}
+	return out
 }
 
 // A body of material below the stripped ground.

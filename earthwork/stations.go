@@ -22,6 +22,7 @@ const (
 	ByStep    Reason = "interval"
 	ByCurve   Reason = "vertical curve"
 	ByElement Reason = "horizontal element"
+	ByRow     Reason = "superelevation"
 	ByTurning Reason = "turning point"
 	ByCulvert Reason = "culvert"
 )
@@ -38,10 +39,10 @@ type PayStation struct {
 
 // KeyPlaces are the stations that geometry gives.
 type KeyPlaces struct {
-	Over                       station.Interval // the road
-	Sections, Strata           []station.Station
-	Curves, Elements, Turnings []station.Station
-	Culverts                   []station.Station
+	Over                   station.Interval // the road
+	Sections, Strata       []station.Station
+	Curves, Elements, Rows []station.Station // Rows: of the superelevation table
+	Turnings, Culverts     []station.Station
 }
 
 // PayStations returns the stations of the road at which it is cut, increasing:
@@ -62,6 +63,7 @@ func PayStations(req Request, key KeyPlaces) []PayStation {
 	if req.KeyPoints {
 		l.add(ByCurve, key.Curves...)
 		l.add(ByElement, key.Elements...)
+		l.add(ByRow, key.Rows...)
 		l.add(ByTurning, key.Turnings...)
 		l.add(ByCulvert, key.Culverts...)
 	}

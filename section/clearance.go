@@ -60,9 +60,8 @@ func (r *Road) clearBetween(c *Clearance, a, b station.Station) {
 		return
 	}
 	for _, off := range r.typicals[k].corners(c.Obstacle.Left, c.Obstacle.Right) {
-		rise := r.typicals[k].Rise(off)
 		gap := func(s station.Station) (g, obstacle, road float64) {
-			obstacle, road = c.Obstacle.level(s), r.Elev(s)+rise
+			obstacle, road = c.Obstacle.level(s), r.Elev(s)+r.shape(k, s).Rise(off)
 			if c.Obstacle.Under {
 				return obstacle - road, obstacle, road
 			}

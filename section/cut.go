@@ -30,7 +30,7 @@ func (r *Road) Slice(w *Scratch, dst *Slice, at station.Station, before bool) {
 		r.cutGround(w, dst, firstWidth)
 		return
 	}
-	t := &r.typicals[dst.Typical]
+	t := r.shape(dst.Typical, at)
 	dst.Subgrade = dst.Finished - t.Pavement
 	for width := firstWidth; ; width *= 2 {
 		gaps := r.cutGround(w, dst, width)

@@ -1,6 +1,8 @@
 package section
 
 import (
+	"slices"
+
 	"sagcrest/profile/station"
 )
 
@@ -64,37 +66,40 @@ func (r *Road) stretches(id LineID) (out []stretch) {
 		if over.Empty() {
 			continue
 		}
-		marks := append([]station.Station{over.From}, r.sectionEnds(over)...)
+		marks := append([]station.Station{over.From}, r.shapeEnds(over)...)
 		marks = append(marks, over.To)
 		for i := 1; i < len(marks); i++ {
 			k := r.TypicalAt(marks[i-1], false)
 			if k < 0 {
 				continue
 			}
-			t := &r.typicals[k]
-			from := marks[i-1]
-			o := t.offset(id)
+			from, to := marks[i-1], marks[i]
+			o := r.typicals[k].offset(id)
+			// Between rows the crossfalls are linear in the station.
+			rise := r.shape(k, from).Rise(o)
+			turn := (r.shape(k, to).Rise(o) - rise) / float64(to-from)
 			out = append(out, stretch{
-				over: station.Interval{From: from, To: marks[i]}, offset: o,
-				z: base.level(from) + t.Rise(o), g: base.grade(from), r: base.r,
+				over: station.Interval{From: from, To: to}, offset: o,
+				z: base.level(from) + rise, g: base.grade(from) + turn, r: base.r,
 			})
 		}
 	}
 	return out
 }
 
-// sectionEnds returns the ends of typical sections strictly inside over,
-// increasing.
-func (r *Road) sectionEnds(over station.Interval) (out []station.Station) {
-	for _, s := range r.Breaks(over) {
-		for _, t := range r.typicals {
-			if s == t.Over.From || s == t.Over.To {
-				out = append(out, s)
-				break
-			}
-		}
+// shapeEnds returns the ends of typical sections and the rows of the
+// superelevation table strictly inside over, increasing.
+func (r *Road) shapeEnds(over station.Interval) []station.Station {
+	var all []station.Station
+	for _, t := range r.typicals {
+		all = append(all, t.Over.From, t.Over.To)
 	}
-	return out
+	for _, c := range r.table {
+		all = append(all, c.At)
+	}
+	all = slices.DeleteFunc(all, func(s station.Station) bool { return s <= over.From || s >= over.To })
+	slices.Sort(all)
+	return slices.Compact(all)
 }
 
 // LineEnd is a line at one end of the road: an end is no turning point.

@@ -13,7 +13,7 @@ func (r *Road) Outline(s *Slice) (o Outline) {
 	if s.Typical < 0 {
 		return o
 	}
-	t := &r.typicals[s.Typical]
+	t := r.shape(s.Typical, s.At)
 	lf, le := t.half(s, -1)
 	rf, re := t.half(s, +1)
 	slices.Reverse(lf)

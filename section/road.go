@@ -18,6 +18,7 @@ type Road struct {
 	ground   Ground
 	typicals []Typical
 	strata   []Stratum
+	table    []Crossfalls
 	strip    Stripping
 	over     station.Interval
 }
@@ -29,13 +30,15 @@ type Parts struct {
 	Ground   Ground
 	Typicals []Typical
 	Strata   []Stratum
+	Table    []Crossfalls // superelevation, by station; empty: none
 	Strip    Stripping
 }
 
 // NewRoad lays a road where alignment and grade line both exist. It returns nil
 // and a finding A15 of severity E when they have no length in common; A15 of
 // severity W when their ends lie apart by more than a centimetre; Q11 where a
-// stretch has no typical section or two.
+// stretch has no typical section or two; A01 and F08 where the superelevation
+// table does not fit.
 func NewRoad(p Parts) (*Road, []finding.Finding) {
 	r := &Road{line: p.Line, grade: p.Grade, ground: p.Ground, strip: p.Strip}
 	both := station.Interval{From: max(0, p.Grade.From()), To: min(p.Line.Length(), p.Grade.To())}
@@ -48,7 +51,9 @@ func NewRoad(p Parts) (*Road, []finding.Finding) {
 	}
 	r.over = both
 	r.snap(p.Typicals, p.Strata)
-	return r, append(found, r.checkCover()...)
+	r.table = slices.Clone(p.Table)
+	found = append(found, r.checkCover()...)
+	return r, append(found, r.checkTable()...)
 }
 
 // checkEnds compares the ends of alignment and grade line (A15).
@@ -197,11 +202,14 @@ func (r *Road) holds(over station.Interval, s station.Station, before bool) bool
 
 // Breaks returns the stations strictly inside over where the road's own
 // geometry changes: ends of vertical curves, of horizontal elements and of
-// typical sections, increasing.
+// typical sections, rows of the superelevation table, increasing.
 func (r *Road) Breaks(over station.Interval) []station.Station {
 	all := append(r.grade.Breaks(), r.line.Breaks()...)
 	for _, t := range r.typicals {
 		all = append(all, t.Over.From, t.Over.To)
+	}
+	for _, c := range r.table {
+		all = append(all, c.At)
 	}
 	inside := all[:0:0]
 	for _, s := range all {

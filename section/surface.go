@@ -35,7 +35,7 @@ func (r *Road) Finished(s station.Station, o float64) (z float64, t *Typical, ok
 	if k < 0 {
 		return 0, nil, false
 	}
-	t = &r.typicals[k]
+	t = r.shape(k, s)
 	z = r.Elev(s) + t.Rise(o)
 	if beyond := math.Abs(o) - t.hinge(o); beyond > 0 {
 		z -= beyond / t.FillSlope
@@ -79,7 +79,7 @@ func (r *Road) InCut(w *Scratch, s station.Station, side int) (cut, known bool) 
 	if k < 0 {
 		return false, false
 	}
-	t := &r.typicals[k]
+	t := r.shape(k, s)
 	o := float64(side) * t.Side(side).Hinge()
 	g, ok := r.ground.Level(w, s, o)
 	if !ok {

@@ -72,8 +72,12 @@ func (s *sheets) findingWords() (out []string) {
 	for _, a := range s.o.Idle() {
 		out = append(out, fmt.Sprintf("The acceptance of %s at %s (%s) applies to nothing: the figure changed, the fault is mended, or an error cannot be accepted.", a.Code, a.At, a.Value))
 	}
-	out = append(out, "Superelevation, haul, hydraulics and the volumes between changes of geometry are not computed by this version; every section has the crossfalls of its typical section, in curves too.")
-	return out
+	if len(s.o.Road.Superelevation()) == 0 {
+		out = append(out, "No superelevation is given: every section has the crossfalls of its typical section, in curves too.")
+	} else {
+		out = append(out, "Superelevation is taken from the project's table; whether it suits speed and radius, and whether water runs off its transitions, is not checked by this version.")
+	}
+	return append(out, "Haul, hydraulics and the volumes between changes of geometry are not computed by this version.")
 }
 
 func definitions() []string {

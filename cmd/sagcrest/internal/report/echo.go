@@ -11,7 +11,7 @@ import (
 
 // echoTables lists what the project says, to be ticked against its sources.
 func (s *sheets) echoTables() []*table.Table {
-	return []*table.Table{s.echo(), s.typicalsEcho(), s.pvisEcho()}
+	return []*table.Table{s.echo(), s.typicalsEcho(), s.crossfallsEcho(), s.pvisEcho()}
 }
 
 func (s *sheets) echo() *table.Table {
@@ -85,6 +85,19 @@ func (s *sheets) typicalsEcho() *table.Table {
 				table.Words(fmt.Sprintf("cut %s, fill %s", quantity.Decimal(ty.CutSlope, 2), quantity.Decimal(ty.FillSlope, 2))),
 				table.Words(s.ditchWords(ty.Ditch)), f(ty.Pavement), f(ty.Dressing), table.Words(string(ty.Material)))
 		}
+	}
+	return t
+}
+
+// crossfallsEcho lists the superelevation table.
+func (s *sheets) crossfallsEcho() *table.Table {
+	t := &table.Table{Name: "superelevation", Title: "Superelevation, linear between the rows", Tick: true, Columns: []table.Column{
+		placeCol("station", "station"), inPercent("left_shoulder", "left shoulder"), inPercent("left_lane", "left lane"),
+		inPercent("right_lane", "right lane"), inPercent("right_shoulder", "right shoulder")},
+		Note: "Crossfall: rise to the right; about the reference line. Outside the rows the typical section's own hold."}
+	for _, c := range s.o.Road.Superelevation() {
+		pct := func(v float64) table.Cell { return table.Figure(100*v, s.paper.Grade(v)) }
+		t.Add(s.at(c.At), pct(c.LeftShoulder), pct(c.LeftLane), pct(c.RightLane), pct(c.RightShoulder))
 	}
 	return t
 }

@@ -45,7 +45,7 @@ func TestPageOrder(t *testing.T) {
 	}
 	assert.GreaterOrEqual(t, strings.Count(page, "NOT FOR CONSTRUCTION"), 10, "every sheet is marked")
 	assert.Equal(t, 3, strings.Count(page, `class="working"`))
-	for _, want := range []string{"D04", "NOT OK, short by 0.203 m", "max(OD/8, 0.300 m)", "AASHTO LRFD", "Superelevation", "bank", "compacted", "licensed engineer",
+	for _, want := range []string{"D04", "NOT OK, short by 0.203 m", "max(OD/8, 0.300 m)", "AASHTO LRFD", "No superelevation is given", "bank", "compacted", "licensed engineer",
 		"local levelling", "thead", `class="tick"`, "size: A3 landscape"} {
 		assert.Contains(t, page, want)
 	}

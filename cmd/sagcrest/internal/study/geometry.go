@@ -27,7 +27,7 @@ func geometry(o *Opened) (*section.Road, []finding.Finding) {
 	}
 	road, more := section.NewRoad(section.Parts{
 		Line: line, Grade: grade, Ground: ground,
-		Typicals: p.Typicals, Strata: p.Strata, Strip: p.Request.Stripping,
+		Typicals: p.Typicals, Strata: p.Strata, Table: p.Superelevation, Strip: p.Request.Stripping,
 	})
 	return road, append(found, more...)
 }

@@ -19,6 +19,9 @@ func (o *Outcome) stations() (found []finding.Finding) {
 	for _, t := range road.Typicals() {
 		key.Sections = append(key.Sections, t.Over.From, t.Over.To)
 	}
+	for _, c := range road.Superelevation() {
+		key.Rows = append(key.Rows, c.At)
+	}
 	for _, s := range road.Strata() {
 		key.Strata = append(key.Strata, s.Over.From, s.Over.To)
 	}
