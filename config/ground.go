@@ -55,10 +55,22 @@ func LoadGround(files Files, p *Project) (Ground, []diag.Problem) {
 			g.Raster = &g.Grid.Levels
 		}
 	}
+	p.placeOrder(problems)
 	if which := p.whichFoot(g); which != nil {
 		problems = append(problems, *which)
 	}
 	return g, problems
+}
+
+// placeOrder moves what is wrong with the declared order, which the reader of
+// the points finds, to the line of the project file that declares it.
+func (p *Project) placeOrder(problems []diag.Problem) {
+	for i, q := range problems {
+		if q.Key == "survey.order" && q.Line == 0 {
+			n, _ := p.root.locate(q.Key)
+			problems[i] = p.document.problem(q.Code, n.at, q.Key, q.Message, q.Help)
+		}
+	}
 }
 
 // whichFoot refuses a survey on map coordinates in a foot that nobody named

@@ -113,13 +113,17 @@ func (p pages) otherDatum(l *Laid) finding.Finding {
 }
 
 func (p pages) short(l *Laid) finding.Finding {
-	c := l.Least
+	c, source := l.Least, l.Rule.Source
+	if l.Culvert.Cover != nil {
+		source = "project"
+	}
 	return finding.Finding{
 		Code: "D04", Severity: finding.Error,
 		At:       finding.On(c.At).Aside(c.Offset).Under(p.key("cover_rule")).Named(p.culvert.ID),
 		Measured: finding.Of(c.Cover(), "m"), Limit: finding.Of(l.Required, "m"),
 		Args: []any{p.culvert.ID, finding.Of(c.Cover(), "m"), string(c.What), c.At, c.Offset,
 			finding.Of(l.Required, "m"), finding.Of(l.Required-c.Cover(), "m"), l.Rule.ID},
+		Source: source,
 	}
 }
 

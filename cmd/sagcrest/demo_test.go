@@ -173,7 +173,7 @@ cover_rule = "reinforced concrete"
 		require.NoError(t, json.Unmarshal([]byte(done.out), &r))
 		return r
 	}
-	// 600 m along the demo's first tangent, over ground that the demo surveyed.
+	// 400 m along the demo's first tangent, over ground that the demo surveyed.
 	const a, b = "{ n = 2025, e = 543.3012701892219 }", "{ n = 2225, e = 889.7114317029974 }"
 	forth := write(a+", "+b, `{ station = 0, elev = 110.5 }, { station = 400, elev = 100 }`, "0+360")
 	back := write(b+", "+a, `{ station = 0, elev = 100 }, { station = 400, elev = 110.5 }`, "0+040")

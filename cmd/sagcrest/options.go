@@ -81,6 +81,10 @@ func readOptions(flags *pflag.FlagSet, env Env) (options, error) {
 		Out: v.GetString("out"), Force: v.GetBool("force"), DryRun: v.GetBool("dry-run"),
 		Alternative: v.GetString("alternative"),
 	}
+	_, fromVariable := set["max-warnings"]
+	if asked := fromVariable || flags.Changed("max-warnings"); asked && o.MaxWarnings < 0 {
+		return options{}, usagef("--max-warnings is %d; give a number of warnings from 0", o.MaxWarnings)
+	}
 	if o.JSON && o.Plain && flags.Changed("plain") {
 		return options{}, usagef("--json and --plain ask for two forms of the same output")
 	}

@@ -37,8 +37,10 @@ func TestOptionsRefuse(t *testing.T) {
 		require.ErrorAs(t, err, &usage)
 		assert.Contains(t, usage.message, "SAGCREST_")
 	}
-	_, err := readOptions(parsed(t, []string{"--json", "--plain"}), Env{Var: func(string) string { return "" }})
-	assert.Error(t, err)
+	for _, args := range [][]string{{"--json", "--plain"}, {"--max-warnings", "-1"}} {
+		_, err := readOptions(parsed(t, args), Env{Var: func(string) string { return "" }})
+		assert.Error(t, err)
+	}
 }
 
 func parsed(t *testing.T, args []string) *pflag.FlagSet {

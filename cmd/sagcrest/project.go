@@ -94,7 +94,23 @@ func (a *app) open(p project, alternative string) (*study.Opened, error) {
 	if o == nil || diag.Worst(withoutBasis(problems)) {
 		return nil, badInput(problems)
 	}
+	if problems := otherRoads(o); len(problems) > 0 {
+		return nil, badInput(problems)
+	}
 	return o, nil
+}
+
+// otherRoads returns what makes a road of the document unreadable that is not
+// the one in hand: a project file is read as a whole, or it waits until somebody
+// compares.
+func otherRoads(o *study.Opened) (all []diag.Problem) {
+	for _, name := range o.Doc.Alternatives() {
+		if name != o.Project.Alternative {
+			_, problems := o.Doc.Project(name)
+			all = append(all, withoutBasis(problems)...)
+		}
+	}
+	return all
 }
 
 func withoutBasis(problems []diag.Problem) []diag.Problem {

@@ -21,7 +21,7 @@ func (a *app) tellComparison(d *wire.CompareDoc, roads []contender, args []strin
 	}
 	for _, f := range d.Findings {
 		a.tellProblems(a.out, []diag.Problem{{Code: finding.Code(f.Code), Severity: finding.Error,
-			File: f.Where.File, Line: f.Where.Line, Column: f.Where.Column, Message: f.Message, Help: f.Help}})
+			File: given(f.Where.File), Line: given(f.Where.Line), Column: given(f.Where.Column), Message: f.Message, Help: f.Help}})
 	}
 	if a.opt.Plain {
 		a.tellRankingPlain(d)
@@ -148,4 +148,12 @@ func textOf(s *string) string {
 		return ""
 	}
 	return *s
+}
+
+// given returns what a pointer holds, and nothing for null.
+func given[T any](p *T) (v T) {
+	if p != nil {
+		v = *p
+	}
+	return v
 }

@@ -26,7 +26,8 @@ type app struct {
 // run carries out one command line and returns the exit code. It depends on
 // nothing but its arguments and the file system, and changes nothing but the
 // file system and the two streams: results go to out, messages to errw.
-func run(args []string, in io.Reader, out, errw io.Writer, env Env) (code int) {
+func run(args []string, in io.Reader, stdout, errw io.Writer, env Env) (code int) {
+	out := &remembering{to: stdout}
 	a := &app{in: in, out: out, errw: errw, env: env, asked: wantsJSON(args)}
 	defer func() {
 		if r := recover(); r != nil {
@@ -35,7 +36,27 @@ func run(args []string, in io.Reader, out, errw io.Writer, env Env) (code int) {
 	}()
 	root := a.commands()
 	root.SetArgs(args)
-	return a.leave(root.ExecuteContext(env.Context))
+	err := root.ExecuteContext(env.Context)
+	if out.failed != nil && (err == nil || errors.Is(err, errFindings) || errors.Is(err, out.failed)) {
+		err = fileTrouble("standard output", reason(out.failed), "")
+	}
+	return a.leave(err)
+}
+
+// remembering is a stream that keeps its first failure, so that no line of text
+// is lost unsaid: half a table is worse than none.
+type remembering struct {
+	to     io.Writer
+	failed error
+}
+
+func (r *remembering) Write(p []byte) (int, error) {
+	if r.failed != nil {
+		return 0, r.failed
+	}
+	n, err := r.to.Write(p)
+	r.failed = err
+	return n, err
 }
 
 // commands builds the tree of commands.

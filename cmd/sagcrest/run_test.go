@@ -1,11 +1,13 @@
 package main
 
 import (
+	"bytes"
 	"context"
 	"encoding/json"
 	"os"
 	"path/filepath"
 	"strings"
+	"syscall"
 	"testing"
 
 	"github.com/stretchr/testify/assert"
@@ -34,6 +36,24 @@ var thinCover = []string{`cover_rule = "reinforced concrete"`, "cover = \"9 m\"\
 
 // tightLimit moves the right of way into the works (A09, W).
 var tightLimit = []string{"offset = 18.0", "offset = 5.0"}
+
+// full is a disk without room.
+type full struct{}
+
+func (full) Write([]byte) (int, error) { return 0, syscall.ENOSPC }
+
+// Text that cannot be written is a file system that refused, in every form of
+// the output; what counted against the run does not hide it.
+func TestFullDisk(t *testing.T) {
+	for _, dir := range []string{startRoad(t), startRoad(t, thinCover...)} {
+		for _, args := range []string{"check " + dir, "run " + dir, "check " + dir + " --json", "check " + dir + " --plain", "compare " + dir, "explain", "schema"} {
+			var errw bytes.Buffer
+			env := Env{Context: t.Context(), Var: func(string) string { return "" }}
+			assert.Equal(t, exitFiles, run(strings.Fields(args), strings.NewReader(""), full{}, &errw, env), args)
+			assert.Contains(t, errw.String(), "standard output", args)
+		}
+	}
+}
 
 func TestExitCodes(t *testing.T) {
 	sound, short, tight := startRoad(t), startRoad(t, thinCover...), startRoad(t, tightLimit...)

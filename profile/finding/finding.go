@@ -83,6 +83,7 @@ type Finding struct {
 	Measured, Limit Measure
 	Args            []any
 	Stops           []string
+	Source          string // of this very limit; empty: that of the rule
 }
 
 // Rule is the catalogue's page of a code. Message is a format string with one

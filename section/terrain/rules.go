@@ -20,5 +20,5 @@ func Rules() []finding.Rule {
 
 // noSurface returns the finding for points that no surface can be made of.
 func noSurface(why string) []finding.Finding {
-	return []finding.Finding{{Code: "F02", Severity: finding.Error, Args: []any{"the survey makes no surface: " + why}}}
+	return []finding.Finding{{Code: "F02", Severity: finding.Error, At: finding.Place{Key: "survey.points"}, Args: []any{"the survey makes no surface: " + why}}}
 }

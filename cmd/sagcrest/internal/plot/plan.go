@@ -106,5 +106,5 @@ func (p Plan) north(s *sheet, turn float64) {
 	s.line(pen{1.4, nil, black}, tip(8, -5), tip(16, 0), tip(8, 5))
 	t := tip(24, 0)
 	s.text(9, middle, float64(t.X), float64(t.Y)-3, "N")
-	s.text(8, left, 20, 8, "heavy: reference line; thin: catch lines; dash-dotted: right of way; green bars: culverts")
+	s.text(8, left, 20, 8, "heavy: reference line; thin: catch lines; dash-dotted: right of way; short heavy bars: culverts")
 }

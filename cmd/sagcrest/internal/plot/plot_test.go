@@ -4,11 +4,13 @@ import (
 	"encoding/xml"
 	"fmt"
 	"io"
+	"regexp"
 	"strings"
 	"testing"
 
 	"github.com/stretchr/testify/assert"
 	"github.com/stretchr/testify/require"
+	"gonum.org/v1/plot/vg"
 )
 
 func label(x float64) string { return fmt.Sprintf("0+%03.0f", x) }
@@ -89,6 +91,17 @@ func TestCutAndFillDifferWithoutColour(t *testing.T) {
 	fill, err := s.svg("f", "fill", "")
 	require.NoError(t, err)
 	assert.Greater(t, strings.Count(cut, "M"), 5*strings.Count(fill, "M"), "many dots against few long lines")
+}
+
+// An arc of SVG that ends where it begins draws nothing.
+func TestDotsAreSeen(t *testing.T) {
+	s := newSheet(200, 100)
+	s.dot(black, vg.Point{X: 50, Y: 50}, 2)
+	svg, err := s.svg("d", "dot", "")
+	require.NoError(t, err)
+	found := regexp.MustCompile(`d="M([-\d.,]+)A[-\d.]+,[-\d.]+ \d \d \d ([-\d.,]+)A`).FindStringSubmatch(svg)
+	require.Len(t, found, 3, svg)
+	assert.NotEqual(t, found[1], found[2])
 }
 
 // Axis steps are 1, 2 or 5 times a power of ten and never too many.

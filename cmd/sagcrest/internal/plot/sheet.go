@@ -5,6 +5,7 @@ import (
 	"fmt"
 	"html"
 	"image/color"
+	"math"
 	"regexp"
 	"strings"
 
@@ -77,11 +78,13 @@ func (s *sheet) line(p pen, pts ...vg.Point) {
 	s.c.Stroke(path)
 }
 
-// dot draws a small disc.
+// dot draws a small disc, as two half circles: an arc that ends where it begins
+// is no arc to a reader of SVG.
 func (s *sheet) dot(ink color.RGBA, at vg.Point, radius float64) {
 	var path vg.Path
 	path.Move(vg.Point{X: at.X + vg.Length(radius), Y: at.Y})
-	path.Arc(at, vg.Length(radius), 0, 6.2831853)
+	path.Arc(at, vg.Length(radius), 0, math.Pi)
+	path.Arc(at, vg.Length(radius), math.Pi, math.Pi)
 	path.Close()
 	s.c.SetColor(ink)
 	s.c.Fill(path)

@@ -11,7 +11,7 @@ import (
 
 func (s *sheets) findingsTable() *table.Table {
 	t := &table.Table{Name: "findings", Title: "Findings", Tick: true, Columns: []table.Column{
-		words("code", "code"), words("severity", "grade"), words("place", "place"), words("message", "what is wrong"),
+		words("code", "code"), words("severity", "E/W/N"), words("place", "place"), words("message", "what is wrong"),
 		words("measured", "measured"), words("limit", "limit"), words("input", "in the project file"), words("help", "how to mend it"), words("accepted", "accepted by")},
 		Note: "E is an error and marks the sheets, W a warning, N a note. `sagcrest explain CODE` prints the formula and source of a check."}
 	for i, f := range s.r.Findings {
@@ -49,10 +49,29 @@ func (s *sheets) findingPlace(f finding.Finding) string {
 
 // inputPlace writes where in the project file a finding points.
 func inputPlace(w wire.Where) string {
-	if w.Line == 0 {
-		return w.Key
+	switch {
+	case w.Key == nil:
+		return ""
+	case w.Line == nil:
+		return *w.Key
 	}
-	return fmt.Sprintf("%s, line %d", w.Key, w.Line)
+	return fmt.Sprintf("%s, line %d", *w.Key, *w.Line)
+}
+
+// mostErrors is how many open errors the first page spells out.
+const mostErrors = 12
+
+// openErrors writes the errors that nobody accepted, for the first page.
+func (s *sheets) openErrors() (all []string) {
+	for _, f := range s.r.Findings {
+		if f.Severity == "E" && f.Accepted == nil {
+			all = append(all, f.Code+" "+f.Message)
+		}
+	}
+	if more := len(all) - mostErrors; more > 0 {
+		all = append(all[:mostErrors], fmt.Sprintf("… and %d more, in the table of findings", more))
+	}
+	return all
 }
 
 // openWords counts the findings that nobody accepted.

@@ -33,7 +33,8 @@ type pageData struct {
 	Tool                                                    wire.Tool
 	Inputs                                                  []wire.Input
 	Open                                                    string
-	Mark                                                    string // set on every sheet while errors are open
+	Errors                                                  []string // the open errors, in words
+	Mark                                                    string   // set on every sheet while errors are open
 	Style                                                   template.CSS
 	Chapters                                                []chapter
 }
@@ -50,7 +51,7 @@ func (s *sheets) page() ([]byte, error) {
 	}
 	p := s.o.Project
 	d := pageData{Title: p.Title, Alternative: p.Alternative, Revision: p.Revision, Date: p.Date, Originator: p.Originator, Checker: p.Checker,
-		Tool: s.r.Tool, Inputs: s.r.Inputs, Open: s.openWords(), Style: template.CSS(css)}
+		Tool: s.r.Tool, Inputs: s.r.Inputs, Open: s.openWords(), Errors: s.openErrors(), Style: template.CSS(css)}
 	if d.Title == "" {
 		d.Title = "Road without a title"
 	}

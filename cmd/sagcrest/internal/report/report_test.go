@@ -37,7 +37,7 @@ func files(t *testing.T, alternative string, parts ...string) map[string]string 
 func TestPageOrder(t *testing.T) {
 	page := files(t, "first draft", "roads", "quillmere")["report.html"]
 	last := 0
-	for _, id := range []string{"<h1>", "1 open error, 1 open warning", "NOT FOR CONSTRUCTION", `id="findings"`, `id="definitions"`,
+	for _, id := range []string{"<h1>", "1 open error, 1 open warning", "D04 culvert", "NOT FOR CONSTRUCTION", `id="findings"`, `id="definitions"`,
 		`id="inputs"`, `id="alignment"`, `id="grade-line"`, `id="sections"`, `id="earthwork"`, `id="drainage"`, `id="cost"`, `id="cautions"`} {
 		at := strings.Index(page[last:], id)
 		require.GreaterOrEqual(t, at, 0, id)

@@ -116,5 +116,15 @@ func (o *Outcome) withCost(stops []string) []string {
 			out = append(out, fmt.Sprintf("cost.lines[%d].quantity", i), fmt.Sprintf("cost.lines[%d].amount", i), "cost.total")
 		}
 	}
-	return slices.Compact(out)
+	return once(out)
+}
+
+// once drops what is named a second time and keeps the order.
+func once(paths []string) (out []string) {
+	for _, p := range paths {
+		if !slices.Contains(out, p) {
+			out = append(out, p)
+		}
+	}
+	return out
 }

@@ -51,7 +51,7 @@ func Failed(problems []study.Problem) *ErrorDoc {
 		rule, _ := study.Rule(p.Code)
 		d.Findings = append(d.Findings, Finding{
 			Code: string(p.Code), Severity: p.Severity.String(), Message: p.Message,
-			Where:    Where{Key: p.Key, File: p.File, Line: p.Line, Column: p.Column, ID: p.ID},
+			Where:    Where{Key: some(p.Key), File: some(p.File), Line: some(p.Line), Column: some(p.Column), ID: some(p.ID)},
 			Measured: figure(p.Measured), Limit: figure(p.Limit),
 			Source: rule.Source, Help: p.Help, Stops: []string{},
 		})
@@ -102,7 +102,7 @@ func (b builder) findings() []Finding {
 	for i, f := range b.Findings {
 		p := b.Problem(f)
 		rule, _ := study.Rule(f.Code)
-		w := Where{Key: f.At.Key, File: b.file(p.File), Line: p.Line, Column: p.Column, ID: f.At.ID}
+		w := Where{Key: some(f.At.Key), File: some(b.file(p.File)), Line: some(p.Line), Column: some(p.Column), ID: some(f.At.ID)}
 		if f.At.On {
 			w.From, w.To = fine(float64(f.At.At.From)), fine(float64(f.At.At.To))
 		}
@@ -112,6 +112,9 @@ func (b builder) findings() []Finding {
 		d := Finding{Code: string(f.Code), Severity: f.Severity.String(), Message: p.Message, Where: w,
 			Measured: figure(f.Measured), Limit: figure(f.Limit),
 			Source: rule.Source, Help: rule.Mend, Stops: append([]string{}, f.Stops...)}
+		if f.Source != "" {
+			d.Source = f.Source
+		}
 		if a := b.Accepted[i]; a != nil {
 			d.Accepted = &Accepted{By: a.By, Date: a.Date, Reason: a.Reason}
 		}

@@ -43,16 +43,25 @@ type Figure struct {
 }
 
 // Where is the place of a finding: in the project file, and along the road in
-// metres.
+// metres. What does not exist is null.
 type Where struct {
-	Key    string `json:"key"`
-	File   string `json:"file"`
-	Line   int    `json:"line"`
-	Column int    `json:"column"`
-	From   *Fine  `json:"from"`
-	To     *Fine  `json:"to"`
-	Offset *Fine  `json:"offset"`
-	ID     string `json:"id"`
+	Key    *string `json:"key"`
+	File   *string `json:"file"`
+	Line   *int    `json:"line"`
+	Column *int    `json:"column"`
+	From   *Fine   `json:"from"`
+	To     *Fine   `json:"to"`
+	Offset *Fine   `json:"offset"`
+	ID     *string `json:"id"`
+}
+
+// some returns nil for the zero value: a key, line or name that is not there.
+func some[T comparable](v T) *T {
+	var none T
+	if v == none {
+		return nil
+	}
+	return &v
 }
 
 // Accepted says who answers for a finding.
