@@ -15,7 +15,7 @@ type Barrel struct {
 	Invert, Soffit, Crown []Pt // inside bottom, inside top, outside of the crown
 	Hinges                [2]float64
 	Least                 Pt // on the crown, at the least cover
-	Cover                 float64
+	Cover, Required       float64
 	CoverWords            string
 	LeftWords, RightWords string
 	Level                 func(y float64) string
@@ -31,6 +31,7 @@ func (b Barrel) Draw() (string, error) {
 	f := frame{x0 - pad, x1 + pad, lo - v, hi + v, 50, 44, 835, 250}
 	s.grid(f, func(x float64) string { return fmt.Sprintf("%.0f", x) }, b.Level)
 	b.zone(s, f)
+	b.need(s, f)
 	s.line(groundPen, f.path(clip(b.Ground, f.x0, f.x1))...)
 	s.line(designPen, f.path(b.Surface)...)
 	s.line(earthPen, f.path(b.Datum)...)
@@ -46,7 +47,7 @@ func (b Barrel) Draw() (string, error) {
 	}
 	b.words(s, f)
 	s.text(9, left, f.left, 8, fmt.Sprintf("metres along the barrel from the reference line, right positive; levels in %s, heights %.1f times exaggerated", b.Unit, f.exaggeration()))
-	return s.svg(b.ID, b.Title, "Section along the barrel: finished surface, datum of the cover rule, barrel with wall, original ground, hinges, and the place of the least cover. The table of the culvert holds the figures.")
+	return s.svg(b.ID, b.Title, "Section along the barrel: finished surface, datum of the cover rule, the highest place it leaves to the crown, barrel with wall, original ground, hinges, and the place of the least cover. The table of the culvert holds the figures.")
 }
 
 // zone shades where cover is judged: upright lines between datum and crown.
@@ -62,6 +63,24 @@ func (b Barrel) zone(s *sheet, f frame) {
 		}
 	}
 	s.strokes(hairPen, lines)
+}
+
+// need draws how high the crown may come: where the barrel lies above this line
+// cover is short.
+func (b Barrel) need(s *sheet, f frame) {
+	if b.Required <= 0 {
+		return
+	}
+	var line []Pt
+	for _, p := range clip(b.Datum, b.Hinges[0], b.Hinges[1]) {
+		line = append(line, Pt{p.X, p.Y - b.Required})
+	}
+	s.line(limitPen, f.path(line)...)
+	if at := b.Hinges[0] * 0.6; len(line) > 1 {
+		if y, ok := on(line, at); ok {
+			s.text(8, middle, f.px(at), f.py(y)-9, "crown at most")
+		}
+	}
 }
 
 func (b Barrel) words(s *sheet, f frame) {

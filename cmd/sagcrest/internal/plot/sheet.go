@@ -130,6 +130,9 @@ var (
 	family = regexp.MustCompile(`font-family:[^"]*font-size:`)
 )
 
+// halo keeps words legible where a line crosses them.
+const halo = `<style>text{paint-order:stroke;stroke:#fff;stroke-width:2.5px;stroke-linejoin:round}</style>`
+
 // svg finishes the drawing: an element with a role, title and description, and
 // without any outside address.
 func (s *sheet) svg(id, title, desc string) (string, error) {
@@ -137,8 +140,8 @@ func (s *sheet) svg(id, title, desc string) (string, error) {
 	if _, err := s.c.WriteTo(&b); err != nil {
 		return "", err
 	}
-	head := fmt.Sprintf(`<svg viewBox="0 0 %.0f %.0f" font-family="Liberation Sans, Arial, Helvetica, sans-serif" role="img" aria-labelledby="%s-t %s-d"><title id="%s-t">%s</title><desc id="%s-d">%s</desc>`,
-		s.w, s.h, id, id, id, html.EscapeString(title), id, html.EscapeString(desc))
+	head := fmt.Sprintf(`<svg viewBox="0 0 %.0f %.0f" font-family="Liberation Sans, Arial, Helvetica, sans-serif" role="img" aria-labelledby="%s-t %s-d"><title id="%s-t">%s</title><desc id="%s-d">%s</desc>%s`,
+		s.w, s.h, id, id, id, html.EscapeString(title), id, html.EscapeString(desc), halo)
 	text := opening.ReplaceAllLiteralString(b.String(), head)
 	text = family.ReplaceAllLiteralString(text, "font-size:")
 	return strings.TrimSpace(text), nil

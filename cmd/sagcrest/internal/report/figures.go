@@ -239,7 +239,7 @@ func (s *sheets) barrel(i int, l *drainage.Laid, d drainage.Drawing) plot.Barrel
 	unit := " " + s.paper.LengthUnit()
 	b := plot.Barrel{ID: fmt.Sprintf("culvert-%d", i+1), Title: "Culvert " + l.Culvert.ID, Unit: s.paper.LengthUnit(), Level: s.paper.Elevation,
 		Ground: spots(d.Ground), Surface: spots(d.Surface), Datum: spots(d.Datum), Invert: spots(d.Invert), Soffit: spots(d.Soffit), Crown: spots(d.Crown),
-		Hinges: d.Hinges, Least: plot.Pt{X: d.Least.X, Y: d.Least.Z}, Cover: l.Least.Cover(),
+		Hinges: d.Hinges, Least: plot.Pt{X: d.Least.X, Y: d.Least.Z}, Cover: l.Least.Cover(), Required: l.Required,
 		CoverWords: fmt.Sprintf("cover %s%s, required %s%s", s.paper.Length(l.Least.Cover()), unit, s.paper.Length(l.Required), unit)}
 	words := func(e drainage.End) string {
 		name := map[int]string{-1: "left", 1: "right"}[e.Side]
