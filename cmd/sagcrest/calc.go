@@ -11,6 +11,7 @@ import (
 	"github.com/spf13/cobra"
 
 	"sagcrest/cmd/sagcrest/internal/calc"
+	"sagcrest/cmd/sagcrest/internal/wire"
 	"sagcrest/config/diag"
 )
 
@@ -138,9 +139,9 @@ type topicDocument struct {
 
 func topicsDocument() any {
 	d := struct {
-		ownDocument
+		wire.Head
 		Topics []topicDocument `json:"topics"`
-	}{ownDocument: ownDocument{Head: ownHead("topics")}}
+	}{Head: wire.HeadOf("topics")}
 	for _, t := range calc.Topics() {
 		d.Topics = append(d.Topics, topicDocument{t.Name, t.Title, t.Chapter, t.Inputs()})
 	}

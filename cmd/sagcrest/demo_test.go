@@ -96,6 +96,9 @@ func TestDocumentsKeepToTheirSchema(t *testing.T) {
 		validate("check", []byte(call(t, "check", quillmere(), "--alternative", alternative, "--json").out))
 	}
 	validate("compare", []byte(call(t, "compare", quillmere(), "--json").out))
+	validate("new", []byte(call(t, "new", filepath.Join(t.TempDir(), "x"), "--json").out))
+	validate("explain", []byte(call(t, "explain", "D04", "--json").out))
+	validate("calc", []byte(call(t, "calc", "sight", "kind=crest", "sight=185m", "g1=2", "g2=-3.75", "--json").out))
 	validate("error", []byte(call(t, "check", quillmere(), "--alternative", "third", "--json").out))
 }
 

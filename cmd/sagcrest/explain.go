@@ -8,6 +8,7 @@ import (
 	"github.com/spf13/cobra"
 
 	"sagcrest/cmd/sagcrest/internal/study"
+	"sagcrest/cmd/sagcrest/internal/wire"
 	"sagcrest/profile/finding"
 )
 
@@ -131,11 +132,11 @@ func wrap(text string, width int) (lines []string) {
 
 // rulesDocument prints pages as JSON.
 func (a *app) rulesDocument(rules []finding.Rule) error {
-	d := ownDocument{Head: ownHead("explain"), Codes: []ruleDocument{}}
+	d := wire.ExplainDoc{Head: wire.HeadOf("explain"), Codes: []wire.RulePage{}}
 	for _, r := range rules {
-		d.Codes = append(d.Codes, ruleDocument{
-			string(r.Code), r.Default.String(), r.Title,
-			strings.ReplaceAll(r.Message, "%v", "…"), r.Formula, r.Source, r.Effect, r.Mend,
+		d.Codes = append(d.Codes, wire.RulePage{
+			Code: string(r.Code), Severity: r.Default.String(), Title: r.Title, Message: strings.ReplaceAll(r.Message, "%v", "…"),
+			Formula: r.Formula, Source: r.Source, Effect: r.Effect, Mend: r.Mend,
 		})
 	}
 	return a.print(d)

@@ -25,7 +25,7 @@ type contender struct {
 // open error before the others, then by cost where every one has a complete
 // one, else by the volume to be moved. Equal ones keep their order.
 func rank(cs []contender, basis []wire.Finding) *wire.CompareDoc {
-	d := &wire.CompareDoc{Head: ownHead("compare"), By: "cost", Order: []string{}, Findings: append([]wire.Finding{}, basis...)}
+	d := &wire.CompareDoc{Head: wire.HeadOf("compare"), By: "cost", Order: []string{}, Findings: append([]wire.Finding{}, basis...)}
 	for _, c := range cs {
 		row := compared(c)
 		d.Alternatives = append(d.Alternatives, row)

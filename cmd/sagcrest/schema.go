@@ -14,7 +14,7 @@ import (
 func (a *app) schemaCommand() *cobra.Command {
 	return &cobra.Command{
 		Use:   "schema [DOCUMENT]",
-		Short: "JSON Schema of the project file, or of results, check, compare, error",
+		Short: "JSON Schema of the project file, or of any document",
 		Example: `  sagcrest schema
   sagcrest schema results > results.schema.json`,
 		Args: cobra.MaximumNArgs(1),

@@ -50,12 +50,6 @@ func NewProfile(name string, system System) (p Profile, ok bool) {
 	return Profile{}, false
 }
 
-// Plain returns the profile without separators between digits, for data files.
-func (p Profile) Plain() Profile {
-	p.separator = ""
-	return p
-}
-
 // Feet reports whether figures are posted in feet.
 func (p Profile) Feet() bool { return p.foot != 0 }
 
@@ -73,10 +67,6 @@ func (p Profile) SizeUnit() string { return p.pick("mm", "in") }
 
 // SpeedUnit returns "km/h" or "mile/h".
 func (p Profile) SpeedUnit() string { return p.pick("km/h", "mile/h") }
-
-// Station prints a place with the labels of the project, whatever the column:
-// a label is a name.
-func (p Profile) Station(l station.Labels, s station.Station) string { return l.Format(s) }
 
 // Elevation prints a level given in metres, without unit.
 func (p Profile) Elevation(m float64) string { return p.Length(m) }

@@ -13,7 +13,6 @@ import (
 
 	"sagcrest/config/quantity"
 	"sagcrest/profile/finding"
-	"sagcrest/profile/station"
 )
 
 func TestParse(t *testing.T) {
@@ -218,7 +217,6 @@ func TestTwoColumns(t *testing.T) {
 		print        func(quantity.Profile) string
 		metric, feet string
 	}{
-		{"station", func(p quantity.Profile) string { return p.Station(station.Labels{}, 1250.0005) }, "1+250.001", "1+250.001"},
 		{"elevation", func(p quantity.Profile) string { return p.Elevation(30.48) }, "30.480", "100.00"},
 		{"offset", func(p quantity.Profile) string { return p.Offset(-3.048) }, "-3.048", "-10.00"},
 		{"cover", func(p quantity.Profile) string { return p.Cover(0.3048) }, "0.30", "1.0"},
@@ -227,7 +225,6 @@ func TestTwoColumns(t *testing.T) {
 		{"land", func(p quantity.Profile) string { return p.Land(929.0304) }, "929", "10,000"},
 		{"volume", func(p quantity.Profile) string { return p.Volume(764.554857984) }, "765", "1,000"},
 		{"large volume", func(p quantity.Profile) string { return p.Volume(12345.5) }, "12\u202f346", "16,147"},
-		{"plain volume", func(p quantity.Profile) string { return p.Plain().Volume(12345.5) }, "12346", "16147"},
 		{"size", func(p quantity.Profile) string { return p.Size(0.6096) }, "610", "24.0"},
 		{"speed", func(p quantity.Profile) string { return p.Speed(80 / 3.6) }, "80", "50"},
 		{"k", func(p quantity.Profile) string { return p.K(30.48) }, "30.48", "100.00"},

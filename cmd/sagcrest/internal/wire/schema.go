@@ -18,6 +18,7 @@ func documents() []struct {
 		doc  any
 	}{
 		{"results", Results{}}, {"check", CheckDoc{}}, {"compare", CompareDoc{}}, {"calc", CalcDoc{}}, {"error", ErrorDoc{}},
+		{"new", NewDoc{}}, {"explain", ExplainDoc{}},
 	}
 }
 
