@@ -127,7 +127,7 @@ func (g Grade) marks(s *sheet, f frame) {
 			text = end - 2 - s.width(8, t.Name)
 		}
 		s.line(hairPen, q, pt(float64(q.X), end))
-		s.upright(8, float64(q.X)-2, text, t.Name)
+		s.upright(8, float64(q.X)-5, text, t.Name)
 	}
 	for _, c := range g.Culverts {
 		q := f.at(c.X, c.Y)
