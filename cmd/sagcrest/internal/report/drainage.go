@@ -1,6 +1,7 @@
 package report
 
 import (
+	"strconv"
 	"strings"
 
 	"sagcrest/cmd/sagcrest/internal/table"
@@ -71,15 +72,15 @@ func (s *sheets) sizeWords(c *wire.Culvert) string {
 // coverTable lists the places along the barrel that governs.
 func (s *sheets) coverTable(i int) *table.Table {
 	c := &s.r.Result.Drainage.Culverts[i]
-	t := &table.Table{Name: "cover_" + fileSafe(c.ID), Title: "Culvert " + c.ID + ": cover along the barrel", Tick: true, Columns: []table.Column{
+	t := &table.Table{Name: s.coverName(i), Title: "Culvert " + c.ID + ": cover along the barrel", Tick: true, Columns: []table.Column{
 		placeCol("station", "station"), s.length("offset", "offset"), s.length("invert", "invert"), s.length("crown", "outside of crown"),
 		s.length("surface", "finished surface"), s.length("datum", "datum"), s.length("cover", "cover"), words("judged", "judged here")},
 		Note: "From inlet to outlet. Cover = datum − outside of crown, judged from hinge to hinge; beyond, the depth to the finished slope is listed and never judged."}
 	if c.CoverProfile == nil {
 		return t
 	}
+	row := path("drainage.culverts[%d]", i, "cover_profile[%d]")
 	for k, p := range *c.CoverProfile {
-		row := "drainage.culverts[0].cover_profile[%d]"
 		cover, judgedHere := table.None("–"), "no"
 		if p.Datum != nil {
 			v := float64(*p.Datum - p.Crown)
@@ -92,6 +93,22 @@ func (s *sheets) coverTable(i int) *table.Table {
 			s.fine(p.Surface, path(row, k, "surface"), s.paper.Elevation), s.fine(p.Datum, path(row, k, "datum"), s.paper.Elevation), cover, table.Words(judgedHere))
 	}
 	return t
+}
+
+// coverName names the cover table of a culvert. Ids that differ only in signs or
+// case would share a file, so the later ones are numbered.
+func (s *sheets) coverName(i int) string {
+	own, before := fileSafe(s.r.Result.Drainage.Culverts[i].ID), 0
+	for _, c := range s.r.Result.Drainage.Culverts[:i] {
+		if strings.EqualFold(fileSafe(c.ID), own) {
+			before++
+		}
+	}
+	if before > 0 {
+		// "_" cannot come out of fileSafe, so no other id makes this name.
+		own += "_" + strconv.Itoa(before+1)
+	}
+	return "cover_" + own
 }
 
 // fileSafe turns every run of other signs than letters and digits into "-".

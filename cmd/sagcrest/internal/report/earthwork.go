@@ -24,7 +24,9 @@ func (s *sheets) sectionsTable() *table.Table {
 		if !c.Pay {
 			why += " (not paid)"
 		}
-		t.Add(table.At(c.Place), table.Words(why), cell(c.GroundElev, "ground_elev"), figure(c.FinishedElev, s.paper.Elevation),
+		at := table.At(c.Place)
+		at.ID = sectionID(i)
+		t.Add(at, table.Words(why), cell(c.GroundElev, "ground_elev"), figure(c.FinishedElev, s.paper.Elevation),
 			cell(c.SubgradeElev, "subgrade_elev"), s.fine(c.CutArea, path(row, i, "cut_area"), s.paper.Area),
 			s.fine(c.FillArea, path(row, i, "fill_area"), s.paper.Area), cell(c.StripWidth, "strip_width"), lo, lz, ro, rz)
 	}

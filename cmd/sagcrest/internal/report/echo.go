@@ -6,12 +6,14 @@ import (
 
 	"sagcrest/cmd/sagcrest/internal/table"
 	"sagcrest/config/quantity"
+	"sagcrest/profile/station"
 	"sagcrest/section"
 )
 
 // echoTables lists what the project says, to be ticked against its sources.
 func (s *sheets) echoTables() []*table.Table {
-	return []*table.Table{s.echo(), s.typicalsEcho(), s.crossfallsEcho(), s.pvisEcho()}
+	return []*table.Table{s.echo(), s.typicalsEcho(), s.layersEcho(), s.crossfallsEcho(), s.pvisEcho(), s.tieInsEcho(),
+		s.obstaclesEcho(), s.culvertsEcho(), s.limitsEcho()}
 }
 
 func (s *sheets) echo() *table.Table {
@@ -33,7 +35,7 @@ func (s *sheets) echo() *table.Table {
 		row("coordinate system", "%s", p.Survey.CRS)
 	}
 	req := p.Request
-	row("paid by", "%s, every %s label units, key points %s", methodName(string(req.Method)), s.paper.Count(req.PayStep), onOff(req.KeyPoints))
+	row("paid by", "%s, every %s %s of the labels, key points %s", methodName(string(req.Method)), s.paper.Count(req.PayStep), labelUnit(p.Labels), onOff(req.KeyPoints))
 	row("strip depth, margin", "%s, %s; billed %s", l(req.Stripping.Depth), l(req.Stripping.Margin), stripWords(string(p.StripBasis)))
 	for _, x := range req.Exclusions {
 		row("exception", "%s to %s: %s", p.Labels.Format(x.Over.From), p.Labels.Format(x.Over.To), x.Reason)
@@ -52,6 +54,14 @@ func (s *sheets) echo() *table.Table {
 		row("design speed", "%s %s (kept, without effect in this version)", s.paper.Speed(p.DesignSpeed), s.paper.SpeedUnit())
 	}
 	return t
+}
+
+// labelUnit names the unit in which stations are labelled.
+func labelUnit(l station.Labels) string {
+	if l.US() {
+		return "ft"
+	}
+	return "m"
 }
 
 func onOff(b bool) string {
@@ -134,14 +144,14 @@ func (s *sheets) pvisEcho() *table.Table {
 // echoWords says who must be asked about what is missing.
 func (s *sheets) echoWords() (out []string) {
 	p := s.o.Project
-	missing := []string{}
-	for name, v := range map[string]string{"revision": p.Revision, "date": p.Date, "originator": p.Originator, "checker": p.Checker} {
-		if v == "" {
-			missing = append(missing, name)
+	var missing []string
+	for _, field := range [][2]string{{"revision", p.Revision}, {"date", p.Date}, {"originator", p.Originator}, {"checker", p.Checker}} {
+		if field[1] == "" {
+			missing = append(missing, field[0])
 		}
 	}
 	if len(missing) > 0 {
-		out = append(out, "Not given in the project file, to be filled in by hand: see the title block.")
+		out = append(out, "Not given in the project file, to be filled in by hand in the title block: "+strings.Join(missing, ", ")+".")
 	}
 	return out
 }

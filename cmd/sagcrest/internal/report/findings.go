@@ -2,18 +2,22 @@ package report
 
 import (
 	"fmt"
+	"strconv"
 	"strings"
 
+	"sagcrest/cmd/sagcrest/internal/study"
 	"sagcrest/cmd/sagcrest/internal/table"
 	"sagcrest/cmd/sagcrest/internal/wire"
 	"sagcrest/profile/finding"
+	"sagcrest/profile/station"
 )
 
 func (s *sheets) findingsTable() *table.Table {
 	t := &table.Table{Name: "findings", Title: "Findings", Tick: true, Columns: []table.Column{
 		words("code", "code"), words("severity", "E/W/N"), words("place", "place"), words("message", "what is wrong"),
-		words("measured", "measured"), words("limit", "limit"), words("input", "in the project file"), words("help", "how to mend it"), words("accepted", "accepted by")},
-		Note: "E is an error and marks the sheets, W a warning, N a note. `sagcrest explain CODE` prints the formula and source of a check."}
+		words("measured", "measured"), words("limit", "limit"), words("source", "source of the limit"), words("effect", "what it changes"),
+		words("input", "in the project file"), words("help", "how to mend it"), words("accepted", "accepted by")},
+		Note: "E is an error and marks the sheets, W a warning, N a note. A place leads to the section or working that it lies in. `sagcrest explain CODE` prints the formula of a check."}
 	for i, f := range s.r.Findings {
 		accepted := ""
 		if f.Accepted != nil {
@@ -21,12 +25,52 @@ func (s *sheets) findingsTable() *table.Table {
 		}
 		code := table.Words(f.Code)
 		code.Strong = f.Severity == "E" && f.Accepted == nil
-		t.Add(code, table.Words(f.Severity), table.Words(s.findingPlace(s.o.Findings[i])), table.Words(f.Message),
+		place := table.Words(s.findingPlace(s.o.Findings[i]))
+		place.Link = s.target(s.o.Findings[i])
+		t.Add(code, table.Words(f.Severity), place, table.Words(f.Message),
 			table.Words(s.paper.Measure(s.o.Findings[i].Measured)), table.Words(s.paper.Measure(s.o.Findings[i].Limit)),
-			table.Words(inputPlace(f.Where)), table.Words(f.Help), table.Words(accepted))
+			table.Words(f.Source), table.Words(effect(f)), table.Words(inputPlace(f.Where)), table.Words(f.Help), table.Words(accepted))
 	}
 	return t
 }
+
+// effect says what a finding changes, and how many results it withholds: an
+// accepted one none.
+func effect(f wire.Finding) string {
+	rule, _ := study.Rule(finding.Code(f.Code))
+	if n := len(f.Stops); n > 0 && f.Accepted == nil {
+		return rule.Effect + " It withholds " + plural(n, "figure") + "."
+	}
+	return rule.Effect
+}
+
+// target returns the id of the cell or working that a finding leads to: the
+// working of a culvert that it names, else the first section at or beyond its
+// place. A finding without a place leads nowhere.
+func (s *sheets) target(f finding.Finding) string {
+	if strings.HasPrefix(f.At.Key, "culvert[") {
+		for i, c := range s.r.Result.Drainage.Culverts {
+			if c.ID == f.At.ID {
+				return workingID(i)
+			}
+		}
+	}
+	sections := s.r.Result.Sections
+	if !f.At.On || len(sections) == 0 {
+		return ""
+	}
+	for i, c := range sections {
+		if float64(c.Place.Distance) >= float64(f.At.At.From)-float64(station.Same) {
+			return sectionID(i)
+		}
+	}
+	return sectionID(len(sections) - 1)
+}
+
+// sectionID and workingID name the row of a section and the working of a
+// culvert within the page.
+func sectionID(i int) string { return "section-" + strconv.Itoa(i+1) }
+func workingID(i int) string { return "cover-" + strconv.Itoa(i+1) }
 
 // findingPlace writes name, stretch and offset of a finding.
 func (s *sheets) findingPlace(f finding.Finding) string {

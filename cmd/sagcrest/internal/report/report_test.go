@@ -2,7 +2,9 @@ package report_test
 
 import (
 	"context"
+	"os"
 	"path/filepath"
+	"regexp"
 	"strings"
 	"testing"
 
@@ -17,18 +19,48 @@ import (
 
 // files runs a project of testdata and returns its output folder by name.
 func files(t *testing.T, alternative string, parts ...string) map[string]string {
-	path := filepath.Join(append([]string{"..", "..", "..", "..", "testdata"}, parts...)...)
-	opened, problems := study.Open(config.Disk(), filepath.Join(path, "road.toml"), alternative)
+	return made(t, alternative, filepath.Join(testdata(), filepath.Join(parts...)))
+}
+
+func testdata() string { return filepath.Join("..", "..", "..", "..", "testdata") }
+
+// changed runs the demo road with parts of its text replaced, each once.
+func changed(t *testing.T, replace ...string) map[string]string {
+	from, dir := filepath.Join(testdata(), "roads", "quillmere"), t.TempDir()
+	text, err := os.ReadFile(filepath.Join(from, "road.toml"))
+	require.NoError(t, err)
+	road := string(text)
+	for i := 0; i < len(replace); i += 2 {
+		require.Contains(t, road, replace[i])
+		road = strings.Replace(road, replace[i], replace[i+1], 1)
+	}
+	require.NoError(t, os.WriteFile(filepath.Join(dir, "road.toml"), []byte(road), 0o600))
+	require.NoError(t, os.CopyFS(filepath.Join(dir, "survey"), os.DirFS(filepath.Join(from, "survey"))))
+	return made(t, "base", dir)
+}
+
+// made runs the project in a folder and returns its output folder by name.
+func made(t *testing.T, alternative, dir string) map[string]string {
+	opened, problems := study.Open(config.Disk(), filepath.Join(dir, "road.toml"), alternative)
 	require.Empty(t, problems)
 	o, problems := study.Run(context.Background(), opened, nil)
 	require.Empty(t, problems)
-	made, err := report.Files(o, wire.Build(o))
+	files, err := report.Files(o, wire.Build(o))
 	require.NoError(t, err)
 	out := map[string]string{}
-	for _, f := range made {
+	for _, f := range files {
+		require.NotContains(t, out, f.Name, "two files of one name")
 		out[f.Name] = string(f.Data)
 	}
 	return out
+}
+
+// tableOf cuts the table of a name out of a page.
+func tableOf(t *testing.T, page, name string) string {
+	t.Helper()
+	from := strings.Index(page, `<table id="t-`+name+`"`)
+	require.GreaterOrEqual(t, from, 0, name)
+	return page[from : from+strings.Index(page[from:], "</table>")]
 }
 
 // The page tells bad news first and keeps the order in which a reviewer reads;
@@ -87,4 +119,74 @@ func TestTables(t *testing.T) {
 	} {
 		assert.True(t, strings.HasPrefix(out[name], head), "%s: %s", name, strings.SplitN(out[name], "\n", 2)[0])
 	}
+}
+
+// A culvert that cannot be placed withholds its own figures and no other's: the
+// rows beyond the hinges of the next one have no datum, which is no withholding.
+func TestWithheldIsOfItsOwnCulvert(t *testing.T) {
+	page := changed(t, `station = "0+430"`, `station = "2+430"`)["report.html"]
+	assert.Contains(t, tableOf(t, page, "culverts"), "withheld: A03")
+	for _, other := range []string{"cover_Sedge-brook", "cover_Dry-valley"} {
+		cover := tableOf(t, page, other)
+		assert.NotContains(t, cover, "withheld")
+		assert.Contains(t, cover, "–")
+	}
+}
+
+// Ids that differ only in case or signs keep a table each.
+func TestCulvertsOfLikeNames(t *testing.T) {
+	out := changed(t, `id = "Sedge brook"`, `id = "quill-brook"`, `id = "Dry valley"`, `id = "Quill  brook"`)
+	for _, name := range []string{"cover_Quill-brook.csv", "cover_quill-brook_2.csv", "cover_Quill-brook_3.csv"} {
+		assert.Contains(t, out, name)
+	}
+}
+
+// A finding prints where its limit comes from, what it changes, and a way to its
+// place. Every link of the page arrives.
+func TestFindingsLead(t *testing.T) {
+	page := files(t, "first draft", "roads", "quillmere")["report.html"]
+	findings := tableOf(t, page, "findings")
+	for _, want := range []string{"source of the limit", "what it changes", "AASHTO LRFD", "Land outside the right of way would be used."} {
+		assert.Contains(t, findings, want)
+	}
+	assert.Regexp(t, `<a href="#cover-3">Dry valley, 1\+760.000`, findings)
+	place := regexp.MustCompile(`<a href="#(section-\d+)">0\+620.000`).FindStringSubmatch(findings)
+	require.Len(t, place, 2)
+	assert.Contains(t, page, `<td id="`+place[1]+`">0+620.000</td>`)
+
+	withheld := files(t, "base", "bad", "A06")["report.html"]
+	assert.Regexp(t, `It withholds \d+ figures\.`, tableOf(t, withheld, "findings"))
+	for _, p := range []string{page, withheld} {
+		seen := map[string]bool{}
+		for _, id := range regexp.MustCompile(` id="([^"]+)"`).FindAllStringSubmatch(p, -1) {
+			assert.False(t, seen[id[1]], "twice: "+id[1])
+			seen[id[1]] = true
+		}
+		for _, link := range regexp.MustCompile(`href="#([^"]+)"`).FindAllStringSubmatch(p, -1) {
+			assert.True(t, seen[link[1]], link[1])
+		}
+	}
+}
+
+// What is given is listed to be ticked, with what is left unsaid; what is not
+// given has no table.
+func TestGivenIsEchoed(t *testing.T) {
+	page := changed(t, `pavement = "0.40 m"`, `layers = [ { name = "asphalt", thickness = "0.15 m", bound = true }, { name = "gravel", thickness = "0.25 m", bound = false } ]`)["report.html"]
+	for name, wants := range map[string][]string{
+		"culverts_given": {"Quill brook", "20.00 deg, right ahead", "reinforced concrete", "unsaid: the ground at the two ends", "unsaid: one outside diameter or span"},
+		"obstacles":      {"Tansy Lane", "under", "108.200", "108.500", "5.000"},
+		"right_of_way":   {"-11.000", "0+620.000"},
+		"tie_ins":        {"old road", "start", "112.000"},
+		"layers":         {"asphalt", "gravel", "0.250"},
+		"echo":           {"every 20 m of the labels"},
+	} {
+		for _, want := range wants {
+			assert.Contains(t, tableOf(t, page, name), want, name)
+		}
+	}
+	bare := files(t, "base", "roads", "volcano")["report.html"]
+	for _, name := range []string{"culverts_given", "obstacles", "right_of_way", "tie_ins", "layers"} {
+		assert.NotContains(t, bare, `id="t-`+name+`"`)
+	}
+	assert.Contains(t, page, "in the title block: originator, checker.")
 }

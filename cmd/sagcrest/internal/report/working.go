@@ -13,6 +13,7 @@ type step struct{ Symbol, Formula, Substituted, Result, Source string }
 
 // working is a calculation as it is handed in for checking.
 type working struct {
+	ID      string // of the page
 	Title   string
 	Steps   []step
 	Verdict string
@@ -23,7 +24,7 @@ type working struct {
 func (s *sheets) coverWorking(i int) working {
 	c := &s.r.Result.Drainage.Culverts[i]
 	l := &s.o.Culverts[i]
-	w := working{Title: "Culvert " + c.ID + ": least cover"}
+	w := working{ID: workingID(i), Title: "Culvert " + c.ID + ": least cover"}
 	if c.CoverMin == nil {
 		w.Missing = "The cover is " + s.none(path("drainage.culverts[%d]", i, "cover_min")).Paper + "."
 		return w

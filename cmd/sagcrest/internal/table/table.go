@@ -25,11 +25,13 @@ type Column struct {
 }
 
 // Cell of a row: Paper is what a reader sees, Data what the CSV holds. Distance
-// belongs to station columns.
+// belongs to station columns. ID names the cell for links of the page, Link is
+// the ID of what the cell points at; the CSV knows neither.
 type Cell struct {
 	Paper, Data string
 	Distance    string
 	Strong      bool
+	ID, Link    string
 }
 
 // Table with a file-safe name and a title.

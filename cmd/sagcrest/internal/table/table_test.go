@@ -43,6 +43,36 @@ func TestHTML(t *testing.T) {
 	assert.NotContains(t, text, "2.675")
 }
 
+// A cell can be pointed at and point elsewhere; the CSV holds neither, and
+// nothing that a project writes can leave its attribute.
+func TestLinks(t *testing.T) {
+	tab := &table.Table{Name: "places", Columns: []table.Column{{Key: "a", Title: "a"}, {Key: "b", Title: "b"}}}
+	from, to := table.Words("0+020"), table.Words("D04")
+	from.ID, to.Link = "section-1", `x"><script>`
+	tab.Add(from, to)
+	text := string(tab.HTML())
+	assert.Contains(t, text, `<td id="section-1">0+020</td>`)
+	assert.Contains(t, text, `<a href="#x&#34;&gt;&lt;script&gt;">D04</a>`)
+	assert.Equal(t, "a,b\n0+020,D04\n", string(tab.CSV()))
+
+	empty := table.Words("")
+	empty.Link = "section-1"
+	tab.Rows = nil
+	tab.Add(from, empty)
+	assert.NotContains(t, string(tab.HTML()), "<a ", "nothing to click on")
+}
+
+// Short tables stay whole on paper, long ones may be cut between their rows.
+func TestShortTablesStayWhole(t *testing.T) {
+	tab := &table.Table{Name: "long", Columns: []table.Column{{Key: "a", Title: "a"}}}
+	for range 15 {
+		tab.Add(table.Words("x"))
+	}
+	assert.Contains(t, string(tab.HTML()), `class="short"`)
+	tab.Add(table.Words("x"))
+	assert.NotContains(t, string(tab.HTML()), `class="short"`)
+}
+
 // A row that does not fit is a mistake of the program.
 func TestRowsMustFit(t *testing.T) {
 	assert.Panics(t, func() { sample().Add(table.Words("one")) })
