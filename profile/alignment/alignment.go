@@ -47,9 +47,11 @@ type Alignment struct {
 // rounding of coordinates given to a millimetre and better.
 const leftOver = 1e-6
 
-// New lays an alignment through at least two PIs. It returns nil and findings
-// A16 when arcs and clothoids overlap, do not fit their deflection, or a PI
-// folds back.
+// New lays an alignment through at least two PIs; the first and the last are its
+// ends, and a curve given there is not looked at. It returns nil and findings
+// A16 when arcs and clothoids overlap or do not fit their deflection, when a PI
+// folds back or stands on the one before, and when one has only part of what
+// makes a curve: deflection, radius, clothoids. Fewer than two PIs are F05.
 func New(pi []PI) (*Alignment, []finding.Finding) {
 	if found := checkPoints(pi); found != nil {
 		return nil, found
@@ -119,8 +121,8 @@ func (a *Alignment) curve(r PIRow, at orb.Point) orb.Point {
 		{Clothoid, R, math.Inf(1), r.PI.SpiralOut},
 	}
 	for _, p := range parts {
-		if p.length <= 0 {
-			continue
+		if p.length <= leftOver {
+			continue // two clothoids that just meet have no arc between them
 		}
 		e := Element{Kind: p.kind, RadiusFrom: p.from, RadiusTo: p.to, Start: at, Azimuth: az, PI: r.Index}
 		a.add(e, p.length)

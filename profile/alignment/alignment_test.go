@@ -185,34 +185,3 @@ func TestClosedRoadLengths(t *testing.T) {
 		assert.InDelta(t, c.Exact.Tangent, a.PITable()[0].TangentIn, 1e-9, name)
 	}
 }
-
-// What cannot be laid: the message names both numbers.
-func TestWhatDoesNotFit(t *testing.T) {
-	bend := func(r, in, out, arm float64) []alignment.PI {
-		return []alignment.PI{{N: 0}, {N: arm, Radius: r, SpiralIn: in, SpiralOut: out}, {N: arm, E: arm}}
-	}
-	cases := []struct {
-		name string
-		pi   []alignment.PI
-		key  string
-	}{
-		{"tangent too short", bend(200, 0, 0, 199.9), "alignment.pi[1].radius"},
-		{"clothoids turn too far", bend(100, 160, 160, 900), "alignment.pi[1].spiral"},
-		{"folds back", []alignment.PI{{N: 0}, {N: 100, Radius: 10}, {N: 0}}, "alignment.pi[1].n"},
-		{"twice the same point", []alignment.PI{{N: 0}, {N: 0}, {N: 100}}, "alignment.pi[1].n"},
-		{"turns without a radius", []alignment.PI{{N: 0}, {N: 100}, {N: 200, E: 50}}, "alignment.pi[1].radius"},
-	}
-	for _, c := range cases {
-		t.Run(c.name, func(t *testing.T) {
-			a, found := alignment.New(c.pi)
-			assert.Nil(t, a)
-			require.NotEmpty(t, found)
-			assert.Equal(t, "A16", string(found[0].Code))
-			assert.Equal(t, c.key, found[0].At.Key)
-			assert.True(t, found[0].Measured.Known)
-		})
-	}
-	// The near misses: just enough tangent, two clothoids that just meet.
-	lay(t, bend(200, 0, 0, 200)...)
-	lay(t, bend(100, 100*math.Pi/2, 100*math.Pi/2, 900)...)
-}

@@ -49,3 +49,17 @@ func BenchmarkPointOnClothoid(b *testing.B) {
 		a.At(e.Over.From + l)
 	}
 }
+
+func BenchmarkLocate(b *testing.B) {
+	a := winding(b)
+	b.ReportAllocs()
+	s := station.Station(0)
+	for b.Loop() {
+		if s += 137.3; s > a.Length() {
+			s -= a.Length()
+		}
+		if _, _, ok := a.Locate(a.Point(s, 8)); !ok {
+			b.Fatal(s)
+		}
+	}
+}
