@@ -17,6 +17,7 @@ type Named struct {
 type Alternatives struct {
 	ID, Title, LevelUnit string
 	Label, Level         func(float64) string
+	Stations, Levels     Scale
 	Ground               []Pt
 	Lines                []Named
 }
@@ -25,7 +26,7 @@ type Alternatives struct {
 func dashes() []pen {
 	return []pen{
 		{2.2, nil, black}, {1.6, []vg.Length{10, 4}, blue}, {1.6, []vg.Length{2, 2}, green},
-		{1.6, []vg.Length{10, 3, 2, 3}, amber}, {1.6, []vg.Length{5, 2, 1, 2, 1, 2}, rose},
+		{1.6, []vg.Length{10, 3, 2, 3}, fillInk}, {1.6, []vg.Length{5, 2, 1, 2, 1, 2}, cutInk},
 	}
 }
 
@@ -40,8 +41,8 @@ func (a Alternatives) Draw() (string, error) {
 	}
 	lo, hi := bounds(lines...)
 	pad := (hi - lo) * 0.1
-	f := frame{x0, x1, lo - pad, hi + pad, 50, 30, 1035, 320}
-	s.grid(f, a.Label, a.Level)
+	f := frame{x0, x1, lo - pad, hi + pad, 50, 30, 1025, 320}
+	s.grid(f, axis{a.Stations, a.Label}, axis{a.Levels, a.Level})
 	s.line(pen{0.8, []vg.Length{3, 3}, grey}, f.path(a.Ground)...)
 	pens := dashes()
 	for i, l := range a.Lines {

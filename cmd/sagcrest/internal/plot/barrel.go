@@ -18,7 +18,8 @@ type Barrel struct {
 	Cover, Required       float64
 	CoverWords            string
 	LeftWords, RightWords string
-	Level                 func(y float64) string
+	Level, Length         func(m float64) string
+	Scale                 Scale // of both axes
 }
 
 // Draw draws the culvert.
@@ -29,7 +30,7 @@ func (b Barrel) Draw() (string, error) {
 	lo, hi := bounds(b.Surface, b.Invert, clip(b.Ground, x0-pad, x1+pad))
 	v := (hi - lo) * 0.12
 	f := frame{x0 - pad, x1 + pad, lo - v, hi + v, 50, 44, 835, 250}
-	s.grid(f, func(x float64) string { return fmt.Sprintf("%.0f", x) }, b.Level)
+	s.grid(f, axis{b.Scale, b.Length}, axis{b.Scale, b.Level})
 	b.zone(s, f)
 	b.need(s, f)
 	s.line(groundPen, f.path(clip(b.Ground, f.x0, f.x1))...)
@@ -46,7 +47,7 @@ func (b Barrel) Draw() (string, error) {
 		s.text(8, middle, f.px(h), f.bottom+f.h+4, [2]string{"hinge", "hinge"}[i])
 	}
 	b.words(s, f)
-	s.text(9, left, f.left, 8, fmt.Sprintf("metres along the barrel from the reference line, right positive; levels in %s, heights %.1f times exaggerated", b.Unit, f.exaggeration()))
+	s.text(9, left, f.left, 8, fmt.Sprintf("%s along the barrel from the reference line, right positive; levels in %s, heights %.1f times exaggerated", b.Unit, b.Unit, f.exaggeration()))
 	return s.svg(b.ID, b.Title, "Section along the barrel: finished surface, datum of the cover rule, the highest place it leaves to the crown, barrel with wall, original ground, hinges, and the place of the least cover. The table of the culvert holds the figures.")
 }
 

@@ -27,12 +27,15 @@ type CrossSheet struct {
 	Across    int
 	Sections  []Cross
 	Unit      string
+	Scale     Scale // of offsets
+	Offset    func(m float64) string
 }
 
 // Draw draws the sheet. Lengths and heights have one scale, the same for every
 // section of the sheet.
 func (c CrossSheet) Draw() (string, error) {
 	const cellW, margin, head = 360.0, 10.0, 26.0
+	const foot = 34.0 // below the lowest ground: axis, its figures, and a line of words
 	half, tall := 5.0, 2.0
 	for _, x := range c.Sections {
 		for _, p := range x.Finished {
@@ -44,16 +47,16 @@ func (c CrossSheet) Draw() (string, error) {
 		tall = math.Max(tall, hi-lo)
 	}
 	scale := (cellW - 2*margin) / (2 * half) // points per metre
-	cellH := tall*scale + 2*margin + head + 24
+	cellH := tall*scale + 2*margin + head + foot
 	rows := (len(c.Sections) + c.Across - 1) / c.Across
 	s := newSheet(cellW*float64(c.Across), cellH*float64(rows)+16)
 	for i, x := range c.Sections {
 		col, row := i%c.Across, i/c.Across
 		lo, _ := bounds(x.Finished, x.Earthwork, clip(x.Ground, -half, half))
-		f := frame{-half, half, lo, lo + tall, float64(col)*cellW + margin, s.h - 16 - float64(row+1)*cellH + margin + 24, cellW - 2*margin, tall * scale}
-		x.draw(s, f)
+		f := frame{-half, half, lo, lo + tall, float64(col)*cellW + margin, s.h - 16 - float64(row+1)*cellH + margin + foot, cellW - 2*margin, tall * scale}
+		x.draw(s, f, axis{c.Scale, c.Offset})
 	}
-	s.text(8, left, margin, s.h-10, fmt.Sprintf("looking up-station; one scale for lengths and heights, %.0f %s between the marks of the axis; ground dashed, stripped ground dotted, finished surface heavy, earthwork line dash-dotted; cut dotted, fill with level lines", 5.0, c.Unit))
+	s.text(8, left, margin, s.h-10, fmt.Sprintf("looking up-station; one scale for lengths and heights, offsets in %s, catch points as offset / level; ground dashed, stripped ground dotted, finished surface heavy, earthwork line dash-dotted; cut dotted, fill with level lines", c.Unit))
 	return s.svg(c.ID, c.Title, "Cross sections with ground, finished surface and earthwork line. The table of sections holds areas and catch points.")
 }
 
@@ -73,14 +76,16 @@ func clip(line []Pt, a, b float64) (out []Pt) {
 	return out
 }
 
-func (x Cross) draw(s *sheet, f frame) {
+func (x Cross) draw(s *sheet, f frame, offsets axis) {
 	const axis = 10 // points below the lowest ground, clear of the figures there
 	f0 := f.bottom - axis
 	s.line(hairPen, pt(f.left, f0), pt(f.left+f.w, f0))
 	var ticks vg.Path
-	for o := math.Ceil(f.x0/5) * 5; o <= f.x1; o += 5 {
+	marks := offsets.Marks(f.x0, f.x1, 6)
+	for _, o := range marks {
 		ticks.Move(pt(f.px(o), f0))
 		ticks.Line(pt(f.px(o), f0-3))
+		s.text(6, middle, f.px(o), f0-9, offsets.label(o))
 	}
 	s.strokes(hairPen, ticks)
 	s.line(pen{0.35, nil, grey}, pt(f.px(0), f.bottom), pt(f.px(0), f.bottom+f.h))
@@ -106,5 +111,5 @@ func (x Cross) draw(s *sheet, f frame) {
 		s.text(6.5, a, float64(q.X), float64(q.Y)+dy, c.Name)
 	}
 	s.text(9, left, f.left, f.bottom+f.h+8, x.Title)
-	s.text(7, left, f.left, f0-11, x.Below)
+	s.text(7, left, f.left, f0-19, x.Below)
 }

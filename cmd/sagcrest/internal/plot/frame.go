@@ -44,33 +44,18 @@ func bounds(lines ...[]Pt) (lo, hi float64) {
 	return lo, hi
 }
 
-// step returns a round step that cuts a length into at most n parts.
-func step(length float64, n int) float64 {
-	if length <= 0 {
-		return 1
-	}
-	raw := length / float64(n)
-	unit := math.Pow(10, math.Floor(math.Log10(raw)))
-	for _, m := range []float64{1, 2, 5, 10} {
-		if m*unit >= raw*(1-1e-9) {
-			return m * unit
-		}
-	}
-	return 10 * unit
-}
-
 // grid draws the box, level lines with their figures, and station lines with
 // their labels.
-func (s *sheet) grid(f frame, label func(float64) string, levels func(float64) string) {
-	dy := step(f.y1-f.y0, 8)
-	for y := math.Ceil(f.y0/dy) * dy; y <= f.y1+1e-9; y += dy {
+func (s *sheet) grid(f frame, along, levels axis) {
+	rows := levels.Marks(f.y0, f.y1, 8)
+	for _, y := range rows {
 		s.line(hairPen, f.at(f.x0, y), f.at(f.x1, y))
-		s.text(8, right, f.left-4, f.py(y)-3, levels(y))
+		s.text(8, right, f.left-4, f.py(y)-3, levels.label(y))
 	}
-	dx := step(f.x1-f.x0, 12)
-	for x := math.Ceil(f.x0/dx) * dx; x <= f.x1+1e-9; x += dx {
+	columns := along.Marks(f.x0, f.x1, 12)
+	for _, x := range columns {
 		s.line(hairPen, f.at(x, f.y0), f.at(x, f.y1))
-		s.text(8, middle, f.px(x), f.bottom-11, label(x))
+		s.text(8, middle, f.px(x), f.bottom-11, along.label(x))
 	}
 	s.line(thinPen, f.at(f.x0, f.y0), f.at(f.x1, f.y0), f.at(f.x1, f.y1), f.at(f.x0, f.y1), f.at(f.x0, f.y0))
 }
@@ -133,8 +118,8 @@ func (s *sheet) earth(f frame, ground, design []Pt, from, to float64) {
 			}
 		}
 	}
-	s.strokes(pen{2 * dot, nil, earthInk}, dots)
-	s.strokes(pen{0.6, nil, amber}, levels)
+	s.strokes(pen{2 * dot, nil, cutInk}, dots)
+	s.strokes(pen{0.6, nil, fillInk}, levels)
 }
 
 // dot is half the side of a square dot, in points.

@@ -29,25 +29,30 @@ type Grade struct {
 	ID, Title, LevelUnit string
 	Label                func(x float64) string // station label
 	Level                func(y float64) string
+	Stations, Levels     Scale
 	Ground, Line         []Pt
+	Spans                []Span // tangents and curves in order, from end to end
 	PVIs, Ends           []Mark // points of intersection; ends of curves
 	Turns                []Turn // low and high points of the centre line
 	Culverts             []Mark
 	Windows              []Window
 	Mass                 []Pt
 	MassTitle            string
+	Volume               func(v float64) string
+	Volumes              Scale
 	Balance              []Mark
 }
 
 // Draw draws the grade line.
 func (g Grade) Draw() (string, error) {
-	h := 330.0
+	h := 330 + bandHeight
 	if len(g.Mass) > 0 {
-		h = 500
+		h += 170
 	}
 	s := newSheet(1100, h)
 	f := g.frame(h)
-	s.grid(f, g.Label, g.Level)
+	s.grid(f, axis{g.Stations, g.Label}, axis{g.Levels, g.Level})
+	s.band(f, g.Spans)
 	s.earth(f, g.Ground, g.Line, f.x0, f.x1)
 	s.line(groundPen, f.path(g.Ground)...)
 	s.line(designPen, f.path(g.Line)...)
@@ -70,7 +75,7 @@ func (g Grade) frame(h float64) frame {
 	}
 	pad := (hi - lo) * 0.12
 	x0, x1 := g.Line[0].X, g.Line[len(g.Line)-1].X
-	return frame{x0, x1, lo - pad, hi + 2*pad, 50, h - 300, 1035, 270}
+	return frame{x0, x1, lo - pad, hi + 2*pad, 50, h - 300, 1025, 270}
 }
 
 // names labels the two lines where they lie far apart and no mark stands near.
@@ -157,7 +162,7 @@ func (g Grade) mass(s *sheet, f frame) {
 	lo, hi = math.Min(lo, 0), math.Max(hi, 0)
 	pad := math.Max((hi-lo)*0.15, 1)
 	m := frame{f.x0, f.x1, lo - pad, hi + pad, f.left, 26, f.w, 130}
-	s.grid(m, g.Label, func(y float64) string { return fmt.Sprintf("%.0f", y) })
+	s.grid(m, axis{g.Stations, g.Label}, axis{g.Volumes, g.Volume})
 	s.line(pen{1, nil, black}, m.at(m.x0, 0), m.at(m.x1, 0))
 	s.line(designPen, m.path(g.Mass)...)
 	s.text(9, left, m.left, m.bottom+m.h+5, g.MassTitle)

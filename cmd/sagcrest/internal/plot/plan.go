@@ -2,6 +2,7 @@ package plot
 
 import (
 	"math"
+	"slices"
 
 	"gonum.org/v1/plot/vg"
 )
@@ -16,6 +17,9 @@ type Plan struct {
 	Ends        []Mark // ends of horizontal elements
 	Barrels     [][2]Pt
 	BarrelNames []string
+	Scale       Scale // of the bar that shows how long things are
+	Unit        string
+	Length      func(m float64) string
 }
 
 // Draw draws the plan at one scale, turned so that the road runs from left to
@@ -59,6 +63,7 @@ func (p Plan) Draw() (string, error) {
 	}
 	p.marks(s, f, rot)
 	p.north(s, turn)
+	p.bar(s, f)
 	return s.svg(p.ID, p.Title, "Plan of the alignment with catch lines, right of way and culverts, one scale both ways.")
 }
 
@@ -75,23 +80,54 @@ func (p Plan) marks(s *sheet, f frame, rot func(Pt) Pt) {
 		s.dot(black, f.at(q.X, q.Y), 2)
 		s.call(f.px(q.X), f.py(q.Y), f.px(q.X), f.py(q.Y)-28, 8, m.Name)
 	}
-	for i, m := range p.Ends {
+	for _, m := range p.Ends {
 		q := rot(Pt{m.X, m.Y})
 		s.line(thinPen, pt(f.px(q.X), f.py(q.Y)-8), pt(f.px(q.X), f.py(q.Y)+8))
-		s.call(f.px(q.X), f.py(q.Y)+8, f.px(q.X), f.py(q.Y)+24+float64(i%2)*10, 8, m.Name)
+		s.call(f.px(q.X), f.py(q.Y)+8, f.px(q.X), f.py(q.Y)+24, 8, m.Name)
 	}
 }
 
 // call writes a name away from its place, with a hair line to it, so that it
-// stays clear of the lines along the road.
+// stays clear of the lines along the road; where another called name stands, it
+// goes farther out. Names stay on the sheet.
 func (s *sheet) call(x, y, tx, ty, size float64, name string) {
-	s.line(hairPen, pt(x, y), pt(tx, ty))
+	half := s.width(size, name)/2 + 1
+	at := math.Min(math.Max(tx, half), s.w-half)
+	box, out := room{at - half, ty + 2, at + half, ty + 2 + size}, size+2
 	if ty < y {
-		ty -= size
-	} else {
-		ty += 2
+		box.bottom, box.top, out = ty-size, ty, -out
 	}
-	s.text(size, middle, tx, ty, name)
+	for slices.ContainsFunc(s.called, box.meets) {
+		box.bottom, box.top, ty = box.bottom+out, box.top+out, ty+out
+	}
+	s.called = append(s.called, box)
+	s.line(hairPen, pt(x, y), pt(tx, ty))
+	s.text(size, middle, at, box.bottom, name)
+}
+
+// room is what a called name takes, in points.
+type room struct{ left, bottom, right, top float64 }
+
+func (l room) meets(o room) bool {
+	return l.left < o.right && o.left < l.right && l.bottom < o.top && o.bottom < l.top
+}
+
+// bar draws the scale of the plan in its lower right corner: about a tenth of
+// the sheet long, a round number of units.
+func (p Plan) bar(s *sheet, f frame) {
+	unit := p.Scale.Unit
+	if unit == 0 {
+		unit = 1
+	}
+	long := step((f.x1-f.x0)/unit, 10) * unit
+	b := s.w - 40
+	a, y := b-long/(f.x1-f.x0)*f.w, 14.0
+	s.line(pen{1.4, nil, black}, pt(a, y), pt(b, y))
+	for _, x := range []float64{a, (a + b) / 2, b} {
+		s.line(thinPen, pt(x, y-3), pt(x, y+3))
+	}
+	s.text(8, middle, a, y+5, "0")
+	s.text(8, middle, b, y+5, p.Length(long)+" "+p.Unit)
 }
 
 // north draws an arrow in the upper right corner, and says what the lines are.

@@ -27,11 +27,11 @@ var (
 	grey  = color.RGBA{R: 0x66, G: 0x66, B: 0x66, A: 255}
 	blue  = color.RGBA{R: 0x00, G: 0x72, B: 0xB2, A: 255}
 	green = color.RGBA{R: 0x00, G: 0x9E, B: 0x73, A: 255}
-	rose  = color.RGBA{R: 0xCC, G: 0x79, B: 0xA7, A: 255}
-	amber = color.RGBA{R: 0xE6, G: 0x9F, B: 0x00, A: 255}
-	// earthInk is the rose of cut, darkened so that small dots print in black
-	// and white.
-	earthInk = color.RGBA{R: 0x8C, G: 0x3E, B: 0x6A, A: 255}
+	// cutInk and fillInk are the rose of cut and the amber of fill, darkened so
+	// that dots and thin lines print in black and white: both stand out from
+	// white by more than 3:1 (WCAG 2.2, 1.4.11), which the light hues do not.
+	cutInk  = color.RGBA{R: 0x8C, G: 0x3E, B: 0x6A, A: 255}
+	fillInk = color.RGBA{R: 0x9C, G: 0x6A, B: 0x00, A: 255}
 
 	groundPen   = pen{1, []vg.Length{5, 3}, black}
 	strippedPen = pen{0.6, []vg.Length{1.5, 2}, black}
@@ -57,10 +57,12 @@ type sheet struct {
 	c     *vgsvg.Canvas
 	w, h  float64
 	faces *font.Cache
+	// called holds the room of names that were called out so far.
+	called []room
 }
 
 func newSheet(w, h float64) *sheet {
-	return &sheet{vgsvg.New(vg.Length(w), vg.Length(h)), w, h, font.NewCache(liberation.Collection())}
+	return &sheet{c: vgsvg.New(vg.Length(w), vg.Length(h)), w: w, h: h, faces: font.NewCache(liberation.Collection())}
 }
 
 func (s *sheet) line(p pen, pts ...vg.Point) {

@@ -7,7 +7,8 @@
 //
 // The page says bad news first: how many findings are open, what they are, what
 // hangs on them. Then come definitions and signs, the inputs with a column to
-// tick, and stage by stage tables, drawings (package plot) and workings. Figures
-// are rounded here and nowhere else, by the project's profile; nothing is
-// computed here.
+// tick, and stage by stage tables, drawings (package plot) and workings. A
+// finding leads to the section or working that it lies in, and a working puts in
+// the very numbers that give its result. Figures are rounded here and nowhere
+// else, by the project's profile; nothing is computed here.
 package report

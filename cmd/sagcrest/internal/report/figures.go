@@ -25,7 +25,7 @@ func (s *sheets) label(x float64) string {
 // gradeFigure draws the long profile and the mass diagram.
 func (s *sheets) gradeFigure() ([]figureOf, error) {
 	g := plot.Grade{ID: "grade-line-drawing", Title: "Grade line of " + s.o.Project.Title, LevelUnit: s.paper.LengthUnit(),
-		Label: s.label, Level: s.paper.Elevation, Ground: LongGround(s.o.Road), Line: GradeLine(s.o.Road)}
+		Label: s.label, Level: s.paper.Elevation, Stations: s.stationScale(), Levels: s.lengthScale(), Spans: s.spans(), Ground: LongGround(s.o.Road), Line: GradeLine(s.o.Road)}
 	for i, c := range s.o.Road.Grade().Curves() {
 		g.PVIs = append(g.PVIs, plot.Mark{X: float64(c.PVI.At), Y: c.PVI.Elev, Name: fmt.Sprintf("PVI %d", i+1)})
 		if c.Length > 0 {
@@ -53,7 +53,7 @@ func (s *sheets) gradeFigure() ([]figureOf, error) {
 	}
 	s.massMarks(&g)
 	svg, err := g.Draw()
-	return drawn("Grade line and mass diagram", "triangles: PVIs; short strokes: ends of curves; discs: low and high points of the centre line", svg, err)
+	return drawn("Grade line and mass diagram", "triangles: PVIs; short strokes: ends of curves; discs: low and high points of the centre line; band: grades, and at curves the PVI, its level, length L and K", svg, err)
 }
 
 func (s *sheets) massMarks(g *plot.Grade) {
@@ -61,7 +61,8 @@ func (s *sheets) massMarks(g *plot.Grade) {
 	if m == nil || s.r.Result.Earthwork.Mass.Ordinates == nil {
 		return
 	}
-	g.MassTitle = "mass ordinates, m³ " + string(m.State) + ", rising in cut; discs: balance points"
+	g.MassTitle = "mass ordinates, " + s.paper.VolumeUnit() + " " + string(m.State) + ", rising in cut; discs: balance points"
+	g.Volume, g.Volumes = s.paper.Volume, s.volumeScale()
 	for i, at := range m.Stations {
 		g.Mass = append(g.Mass, plot.Pt{X: float64(at), Y: m.Values[i]})
 	}
@@ -102,6 +103,10 @@ func LongGround(r *section.Road) (out []plot.Pt) {
 	return out
 }
 
+// planStations is how many stations a plan names at most: more would stand on
+// each other along the width of its sheet.
+const planStations = 20
+
 // planFigure draws the alignment from above.
 func (s *sheets) planFigure() ([]figureOf, error) {
 	line := s.o.Road.Line()
@@ -109,7 +114,8 @@ func (s *sheets) planFigure() ([]figureOf, error) {
 		p := line.Point(at, station.Offset(o))
 		return plot.Pt{X: p[0], Y: p[1]}
 	}
-	p := plot.Plan{ID: "plan-drawing", Title: "Plan of " + s.o.Project.Title}
+	p := plot.Plan{ID: "plan-drawing", Title: "Plan of " + s.o.Project.Title,
+		Scale: s.lengthScale(), Unit: s.paper.LengthUnit(), Length: s.paper.Length}
 	for at := s.o.Road.Over().From; at < s.o.Road.Over().To; at += 5 {
 		p.Line = append(p.Line, point(at, 0))
 	}
@@ -129,9 +135,9 @@ func (s *sheets) planFigure() ([]figureOf, error) {
 			p.Limits = append(p.Limits, l)
 		}
 	}
-	for at := s.o.Road.Over().From; at <= s.o.Road.Over().To; at += 100 {
-		q := point(at, 0)
-		p.Stations = append(p.Stations, plot.Mark{X: q.X, Y: q.Y, Name: s.label(float64(at))})
+	for _, at := range s.stationScale().Marks(float64(s.o.Road.Over().From), float64(s.o.Road.Over().To), planStations) {
+		q := point(station.Station(at), 0)
+		p.Stations = append(p.Stations, plot.Mark{X: q.X, Y: q.Y, Name: s.label(at)})
 	}
 	for _, e := range line.Elements()[1:] {
 		q := point(e.Over.From, 0)
@@ -169,7 +175,7 @@ const perSheet = 12
 func (s *sheets) sectionFigures() (out []figureOf, err error) {
 	for from := 0; from < len(s.o.Slices); from += perSheet {
 		to := min(from+perSheet, len(s.o.Slices))
-		sheet := plot.CrossSheet{ID: fmt.Sprintf("sections-%d", from/perSheet+1), Across: 3, Unit: s.paper.LengthUnit(),
+		sheet := plot.CrossSheet{ID: fmt.Sprintf("sections-%d", from/perSheet+1), Across: 3, Unit: s.paper.LengthUnit(), Scale: s.lengthScale(), Offset: s.paper.Length,
 			Title: fmt.Sprintf("Sections %s to %s", s.label(float64(s.o.Slices[from].At)), s.label(float64(s.o.Slices[to-1].At)))}
 		for i := from; i < to; i++ {
 			sheet.Sections = append(sheet.Sections, s.cross(&s.o.Slices[i]))
@@ -238,6 +244,7 @@ func (s *sheets) barrel(i int, l *drainage.Laid, d drainage.Drawing) plot.Barrel
 	}
 	unit := " " + s.paper.LengthUnit()
 	b := plot.Barrel{ID: fmt.Sprintf("culvert-%d", i+1), Title: "Culvert " + l.Culvert.ID, Unit: s.paper.LengthUnit(), Level: s.paper.Elevation,
+		Length: s.paper.Length, Scale: s.lengthScale(),
 		Ground: spots(d.Ground), Surface: spots(d.Surface), Datum: spots(d.Datum), Invert: spots(d.Invert), Soffit: spots(d.Soffit), Crown: spots(d.Crown),
 		Hinges: d.Hinges, Least: plot.Pt{X: d.Least.X, Y: d.Least.Z}, Cover: l.Least.Cover(), Required: l.Required,
 		CoverWords: fmt.Sprintf("cover %s%s, required %s%s", s.paper.Length(l.Least.Cover()), unit, s.paper.Length(l.Required), unit)}

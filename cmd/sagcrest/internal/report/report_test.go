@@ -2,9 +2,14 @@ package report_test
 
 import (
 	"context"
+	"go/constant"
+	"go/token"
+	"go/types"
+	"html"
 	"os"
 	"path/filepath"
 	"regexp"
+	"strconv"
 	"strings"
 	"testing"
 
@@ -189,4 +194,62 @@ func TestGivenIsEchoed(t *testing.T) {
 		assert.NotContains(t, bare, `id="t-`+name+`"`)
 	}
 	assert.Contains(t, page, "in the title block: originator, checker.")
+}
+
+// A project in feet is drawn in feet: axes are marked at round feet and yards,
+// and offsets of the sections stand where they say.
+func TestFeetAreDrawnInFeet(t *testing.T) {
+	page := files(t, "base", "bad", "U01", "near")["report.html"]
+	at := func(words string) float64 {
+		found := regexp.MustCompile(`<text x="([-\d.]+)" y="[-\d.]+" transform="scale\(1, -1\)"\s+style="font-size:6px">` + regexp.QuoteMeta(words) + `</text>`).FindStringSubmatch(page)
+		require.Len(t, found, 2, words)
+		x, err := strconv.ParseFloat(found[1], 64)
+		require.NoError(t, err)
+		return x
+	}
+	for _, want := range []string{">0+20.00<", ">1+80.00<", ">51.50<", ">-50<", "yd³ compacted, rising in cut", "offsets in ft"} {
+		assert.Contains(t, page, want)
+	}
+	assert.NotContains(t, page, ">0+32.81<", "marks at round metres")
+	// The road's half width is 4 m = 13.12 ft: ten feet lie inside it by the scale
+	// of the sheet, which shows 2·(half + 2 m) on 340 points.
+	half := func() float64 {
+		csv := files(t, "base", "bad", "U01", "near")["sections.csv"]
+		most := 0.0
+		for _, line := range strings.Split(strings.TrimSpace(csv), "\n")[1:] {
+			cells := strings.Split(line, ",")
+			o, err := strconv.ParseFloat(cells[len(cells)-2], 64)
+			require.NoError(t, err)
+			most = max(most, o)
+		}
+		return most
+	}()
+	assert.InDelta(t, 10*1200.0/3937*340/(2*(half+2)), at("20.00")-at("10.00"), 1.5)
+}
+
+// Law: every line of a working evaluates to its printed result, to the place in
+// which its numbers are posted.
+func TestWorkingsEvaluate(t *testing.T) {
+	row := regexp.MustCompile(`<tr><td>([^<]*)</td><td>[^<]*</td><td>([^<]*)</td><td class="n">(\S+) (m|ft)</td>`)
+	plain := strings.NewReplacer("−", "-", "·", "*", "\u202f", "")
+	for name, rule := range map[string]string{
+		"one eighth or a floor": "reinforced concrete", "a floor": "storm drain under highway", "a half": "two thirds of the fill",
+		"a share of the span": "corrugated metal",
+	} {
+		out := changed(t, `cover_rule = "reinforced concrete"`, `cover_rule = "`+rule+`"`)
+		page := out["report.html"]
+		lines := row.FindAllStringSubmatch(page[strings.Index(page, `class="working"`):], -1)
+		require.Len(t, lines, 15, name)
+		for _, l := range lines {
+			text := plain.Replace(html.UnescapeString(l[2]))
+			v, err := types.Eval(token.NewFileSet(), nil, token.NoPos, "float64("+text+")")
+			require.NoError(t, err, "%s: %s", l[1], text)
+			got, _ := constant.Float64Val(v.Value)
+			want, err := strconv.ParseFloat(l[3], 64)
+			require.NoError(t, err)
+			// Three numbers put in, each off by half a millimetre at most, and the
+			// result by half a millimetre.
+			assert.InDelta(t, want, got, 0.0021, "%s: %s %s", name, l[1], text)
+		}
+	}
 }

@@ -3,7 +3,6 @@ package report
 import (
 	"fmt"
 
-	"sagcrest/cmd/sagcrest/internal/wire"
 	"sagcrest/drainage"
 )
 
@@ -33,11 +32,11 @@ func (s *sheets) coverWorking(i int) working {
 	p := l.Least
 	height := l.Culvert.Height()
 	w.Steps = []step{
-		{"z_i", "invert of the barrel at the place, straight between its ends", s.endsWords(c), f(p.Invert) + unit, "geometry"},
+		{"z_i", "z_l + (z_r − z_l)·s/L, invert at s from the left end, along the barrel in plan", s.invertAt(l), f(p.Invert) + unit, "geometry"},
 		{"z_c", "z_i + D + t, outside of the crown", fmt.Sprintf("%s + %s + %s", f(p.Invert), f(height), f(l.Culvert.Wall)), f(p.Crown) + unit, "geometry"},
 		{"z_d", datumWords(l.Rule.Datum), fmt.Sprintf("%s − %s", f(p.Surface), f(p.Surface-p.Datum)), f(p.Datum) + unit, "typical section"},
 		{"c", "z_d − z_c, least from hinge to hinge", fmt.Sprintf("%s − %s", f(p.Datum), f(p.Crown)), f(p.Cover()) + unit, "geometry"},
-		{"c_req", l.Rule.Formula, "rule: " + l.Rule.ID, f(l.Required) + unit, s.ruleSource(l.Rule)},
+		{"c_req", l.Rule.Formula, s.requiredAt(l), f(l.Required) + unit, s.ruleSource(l.Rule)},
 	}
 	w.Verdict = fmt.Sprintf("c = %s%s at %s, offset %s%s, over the %s; c_req = %s%s: ", f(p.Cover()), unit, c.CoverMin.Place.Station,
 		f(float64(p.Offset)), unit, c.CoverMin.Where, f(l.Required), unit)
@@ -52,12 +51,36 @@ func (s *sheets) coverWorking(i int) working {
 	return w
 }
 
-func (s *sheets) endsWords(c *wire.Culvert) string {
-	if c.InletInvert == nil || c.OutletInvert == nil {
-		return "from the two ends"
+// invertAt puts the two ends and the place of the least cover into the line of
+// the invert.
+func (s *sheets) invertAt(l *drainage.Laid) string {
+	a, b := l.Ends[0], l.Ends[1]
+	left := s.paper.Elevation(a.Invert)
+	return fmt.Sprintf("%s + (%s − %s)·%s/%s", left, s.paper.Elevation(b.Invert), left, s.paper.Length(l.Least.X-a.X), s.paper.Length(b.X-a.X))
+}
+
+// requiredAt puts the pipe into the rule: a share of one of its sizes, a floor,
+// or the greater of both; a rule without a number takes the project's figure.
+func (s *sheets) requiredAt(l *drainage.Laid) string {
+	r, c, f := l.Rule, &l.Culvert, s.paper.Length
+	if !r.HasNumber || c.Cover != nil {
+		return f(l.Required)
 	}
-	return fmt.Sprintf("inlet %s, outlet %s, length in plan %s", s.paper.Elevation(float64(*c.InletInvert)),
-		s.paper.Elevation(float64(*c.OutletInvert)), s.paper.Length(float64(*c.LengthPlan)))
+	size := f(c.Height())
+	switch {
+	case r.Of == drainage.OutsideDiameter:
+		size = fmt.Sprintf("(%s + 2·%s)", size, f(c.Wall))
+	case r.Of == drainage.ClearSpan && c.Shape == drainage.Box:
+		size = f(c.Span)
+	}
+	if r.Fraction == 0 {
+		return f(r.Floor)
+	}
+	share := size + "/" + s.paper.Count(1/r.Fraction)
+	if r.Floor == 0 {
+		return share
+	}
+	return "max(" + share + ", " + f(r.Floor) + ")"
 }
 
 func datumWords(d drainage.Datum) string {
@@ -69,8 +92,9 @@ func datumWords(d drainage.Datum) string {
 }
 
 func (s *sheets) ruleSource(r drainage.CoverRule) string {
+	source := "rule “" + r.ID + "”: " + r.Source
 	if r.FromMemory {
-		return r.Source + "; an assumption, to be replaced by project data"
+		source += "; an assumption, to be replaced by project data"
 	}
-	return r.Source
+	return source
 }

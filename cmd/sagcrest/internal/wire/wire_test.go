@@ -1,10 +1,13 @@
 package wire
 
 import (
+	"bytes"
 	"encoding/json"
 	"math"
+	"strings"
 	"testing"
 
+	"github.com/santhosh-tekuri/jsonschema/v6"
 	"github.com/stretchr/testify/assert"
 	"github.com/stretchr/testify/require"
 	"pgregory.net/rapid"
@@ -77,4 +80,45 @@ func TestSchemas(t *testing.T) {
 	assert.False(t, ok)
 	text, _ := Schema("results")
 	assert.Contains(t, string(text), `"null"`)
+}
+
+// A document in which everything that may be withheld is null keeps to its
+// schema, as does one with keys of a later version; one that lacks a key, or
+// holds a word that is not of its list, does not.
+func TestWithheldKeepsToTheSchema(t *testing.T) {
+	text, ok := Schema("results")
+	require.True(t, ok)
+	source, err := jsonschema.UnmarshalJSON(bytes.NewReader(text))
+	require.NoError(t, err)
+	c := jsonschema.NewCompiler()
+	require.NoError(t, c.AddResource("results.json", source))
+	schema, err := c.Compile("results.json")
+	require.NoError(t, err)
+	valid := func(doc string) error {
+		v, err := jsonschema.UnmarshalJSON(strings.NewReader(doc))
+		require.NoError(t, err)
+		return schema.Validate(v)
+	}
+
+	end := Place{0, "0+000.000"}
+	r := &Results{Head: head("results"), Inputs: []Input{}, Alternative: "base", Status: "withheld",
+		Findings: []Finding{{Code: "A06", Severity: "E", Stops: []string{"earthwork.totals.cut_bank"}}},
+		Result: Result{
+			Alignment: Alignment{Elements: []Element{{Kind: "tangent", From: end, To: end}}},
+			Profile: Profile{Curves: []Curve{{Kind: "sag", Shape: "parabola"}}, LowPoints: []Turning{}, HighPoints: []Turning{},
+				Ends: []LineEnd{}, Clearances: []Clearance{{Name: "lane", Side: "under"}}},
+			Sections: []Section{{Place: end}},
+			Earthwork: Earthwork{Totals: Totals{PayMethod: "end_area", Methods: []Method{{Name: "end_area"}}, Materials: []Material{{}}},
+				Intervals: []Interval{{From: end, To: end}}, Mass: Mass{State: "bank"}},
+			Drainage: Drainage{Culverts: []Culvert{{ID: "C", Shape: "circular", Verdict: "withheld", Mends: []Mend{}}}},
+			Cost:     &Cost{Lines: []Line{{Item: "strip"}}},
+		}}
+	text, err = Encode(r)
+	require.NoError(t, err)
+	doc := string(text)
+	require.NoError(t, valid(doc))
+	assert.NoError(t, valid(strings.Replace(doc, `"alternative"`, `"of_a_later_version": {}, "alternative"`, 1)))
+	assert.Error(t, valid(strings.Replace(doc, `"cut_bank": null,`, "", 1)), "null is not absent")
+	assert.Error(t, valid(strings.Replace(doc, `"withheld"`, `"half done"`, 1)))
+	assert.Error(t, valid(strings.Replace(doc, `"finished_elev": 0`, `"finished_elev": null`, 1)), "what always exists is never null")
 }
